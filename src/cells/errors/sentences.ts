@@ -1,0 +1,87 @@
+import type { Reason, Refusal } from "../../numerics/outcome";
+import type { Call } from "../reading/call";
+import { placeOf } from "../reading/call";
+import { formatNumber } from "../writing/format-number";
+import { cellError, type ErrorCode } from "./cell-error";
+
+interface Sentence {
+  code: ErrorCode;
+  /** What the function needs, after "NAME needs". */
+  need: (argument: string, v: Values) => string;
+  /** What was found instead, after the place; "" where the place says it all. */
+  found: (v: Values) => string;
+}
+
+type Values = (name: string) => string;
+
+/** The one table of sentences: a refusal's code → what a user reads. */
+const SENTENCES: Record<Reason, Sentence> = {
+  "too few points": {
+    code: "#VALUE!",
+    need: (a, v) => `at least ${v("least")} numbers in ${a}`,
+    found: (v) => `${v("count")} given`,
+  },
+  "lengths differ": {
+    code: "#VALUE!",
+    need: (a, v) => `${a} of ${v("expected")} rows, as long as the first column`,
+    found: (v) => `${v("count")} given`,
+  },
+  "not rising": { code: "#VALUE!", need: (a) => `rising ${a}`, found: (v) => `has ${v("value")} after ${v("before")}` },
+  "not finite": { code: "#VALUE!", need: (a) => `finite numbers in ${a}`, found: () => "is too large or not a number" },
+  "not positive": { code: "#VALUE!", need: (a) => `${a} above 0`, found: (v) => `has ${v("value")}` },
+  negative: { code: "#VALUE!", need: (a) => `${a} of 0 or more`, found: (v) => `has ${v("value")}` },
+  "outside range": {
+    code: "#VALUE!",
+    need: (a, v) => `${a} between ${v("least")} and ${v("most")}`,
+    found: (v) => `has ${v("value")}`,
+  },
+  "outside column": {
+    code: "#N/A",
+    need: (a, v) => `${a} inside the column, ${v("least")} to ${v("most")}`,
+    found: (v) => `asks for ${v("value")}, and nothing is extrapolated`,
+  },
+  "curve not positive": {
+    code: "#VALUE!",
+    need: () => "an edge speed that stays above 0 between its stations",
+    found: () => "starts a step where the fitted curve dips to 0 or below; add a station there or set edge fit = monotone",
+  },
+  "no edge found": {
+    code: "#N/A",
+    need: () => "a traverse that reaches the layer's edge",
+    found: () => "the speed still rises at the last point; give the edge speed",
+  },
+  "edge below profile": {
+    code: "#VALUE!",
+    need: (a) => `${a} not far below the profile's own speeds`,
+    found: (v) => `has ${v("value")} where the profile reaches ${v("speed")}`,
+  },
+  "profile undetermined": { code: "#N/A", need: () => "a profile that fixes the answer", found: () => "this one does not" },
+  "fit undetermined": { code: "#N/A", need: () => "points that determine the fit", found: () => "these do not" },
+  "noise undetermined": {
+    code: "#N/A",
+    need: () => "a column from which the noise can be told",
+    found: () => "cross-validation finds no minimum; give the noise as a number",
+  },
+  "no convergence": {
+    code: "#N/A",
+    need: () => "an iteration that settles",
+    found: (v) => `it stopped after ${v("count")} steps`,
+  },
+};
+
+/** The sentence for a refusal, in the form `NAME needs …; row 7 (A11) has …`. */
+export function sentenceOf(call: Call, refusal: Refusal): string {
+  const v: Values = (name) => {
+    const value = refusal.values?.[name];
+    return value === undefined ? "another value" : formatNumber(value);
+  };
+  const sentence = SENTENCES[refusal.reason];
+  const place = placeOf(call, refusal);
+  const found = [place, sentence.found(v)].filter((part) => part !== "").join(" ");
+  return `${call.name} needs ${sentence.need(refusal.argument ?? "its input", v)}; ${found}`;
+}
+
+/** The error to throw for a refusal. */
+export function refusalError(call: Call, refusal: Refusal): Error {
+  return cellError(SENTENCES[refusal.reason].code, sentenceOf(call, refusal));
+}
