@@ -97,8 +97,8 @@ export interface EngineCompiledFormula {
   symbols: string[];
   literalValues: { numbers: EngineValue[]; strings: EngineValue[] };
   rangeDependencies: EngineRange[];
-  getTokens(getters: EngineGetters): EngineToken[];
-  toFormulaString(getters: EngineGetters, referenceOption?: unknown): string;
+  getTokens(getters: EngineGetters, ...options: unknown[]): EngineToken[];
+  toFormulaString(getters: EngineGetters, ...options: unknown[]): string;
 }
 
 /** What the engine keeps per formula shape: called with the compiled formula as `this`. */
