@@ -52,7 +52,7 @@ export function generatedText(files: readonly CellFunctionFile[]): Generated {
   const functionsText =
     HEAD +
     imports +
-    "\n// eslint-disable-next-line @typescript-eslint/no-explicit-any\n" +
+    "\n" +
     `export const wallFunctions: Readonly<Record<string, (...args: any[]) => unknown>> = {\n${lines}};\n`;
   return { catalogueText, functionsText, entries, faults };
 }

@@ -40,5 +40,103 @@ export const catalogue: readonly CatalogueEntry[] = [
       "field",
       "spill"
     ]
+  },
+  {
+    "name": "LIMITS_OF",
+    "family": "Sheet",
+    "purpose": "States where a WALL function is valid and how far it is off there, one statement a row.",
+    "parameters": [
+      {
+        "name": "name",
+        "description": "Name of a WALL function as text, with or without WALL.",
+        "unit": "text",
+        "optional": false
+      }
+    ],
+    "gives": "One statement a row.",
+    "resultUnit": "text",
+    "limits": [
+      "Any function of this catalogue; another name gives #N/A with the nearest one."
+    ],
+    "sources": [
+      "The comment above the function itself."
+    ],
+    "examples": [
+      {
+        "formula": "=ROWS(WALL.LIMITS_OF(\"LIMITS_OF\"))",
+        "value": 1
+      }
+    ],
+    "words": [
+      "validity",
+      "range",
+      "accuracy",
+      "error"
+    ]
+  },
+  {
+    "name": "NOTES_OF",
+    "family": "Sheet",
+    "purpose": "Collects what a spilled table's note column says, one note a row, each with its station.",
+    "parameters": [
+      {
+        "name": "table",
+        "description": "A table spilled by a WALL function, heading row included, such as D5#.",
+        "unit": "as spilled",
+        "optional": false
+      }
+    ],
+    "gives": "One note a row, after the station it stands at; \"no notes\" where there is none.",
+    "resultUnit": "text",
+    "limits": [
+      "Any table with a note column; a table without one gives #N/A."
+    ],
+    "sources": [
+      "Own definition; headings as in the nomenclature list of DEVELOPERS.md."
+    ],
+    "examples": [
+      {
+        "formula": "=INDEX(WALL.NOTES_OF({\"station x\",\"note\";0.5,\"starts here\"}),1,1)",
+        "value": "at 0.5: starts here"
+      }
+    ],
+    "words": [
+      "warning",
+      "remark",
+      "message"
+    ]
+  },
+  {
+    "name": "SOURCE_OF",
+    "family": "Sheet",
+    "purpose": "Names the published sources behind a WALL function, one a row.",
+    "parameters": [
+      {
+        "name": "name",
+        "description": "Name of a WALL function as text, with or without WALL.",
+        "unit": "text",
+        "optional": false
+      }
+    ],
+    "gives": "One source a row.",
+    "resultUnit": "text",
+    "limits": [
+      "Any function of this catalogue; another name gives #N/A with the nearest one."
+    ],
+    "sources": [
+      "The comment above the function itself."
+    ],
+    "examples": [
+      {
+        "formula": "=LEFT(INDEX(WALL.SOURCE_OF(\"THWAITES_MARCH\"),1),8)",
+        "value": "Thwaites"
+      }
+    ],
+    "words": [
+      "reference",
+      "literature",
+      "method",
+      "citation"
+    ]
   }
 ];
