@@ -1,3 +1,6 @@
+// Taken out of the global object once: the smoother calls it half a dozen times a point.
+const { sqrt } = Math;
+
 /**
  * Work space of the smoothing spline for one column: knots at mean spacing 1, the square root of each weight, and the triangular
  * factor. Allocated once, used for every trial of the smoothing strength.
@@ -49,7 +52,7 @@ export function makeSmoother(width: Float64Array, rootWeight: Float64Array): Smo
  * @returns Σ w (v − g)² and the trace of the matrix that takes v to g ("equivalent degrees of freedom")
  */
 export function smoothAt(s: Smoother, v: Float64Array, strength: number): { residual: number; freedom: number } {
-  forward(s, v, Math.sqrt(strength));
+  forward(s, v, sqrt(strength));
   return backward(s, v);
 }
 
@@ -66,15 +69,15 @@ function forward(s: Smoother, v: Float64Array, root: number): void {
   for (let i = 0; i < n; i += 1) {
     // Row of the observation (w, 0 | w v) into the two known rows.
     const w = rootWeight[i];
-    let r = Math.sqrt(a00 * a00 + w * w);
+    let r = sqrt(a00 * a00 + w * w);
     let c = a00 / r;
     let d = w / r;
     a00 = r;
     const o1 = -d * a01;
     a01 = c * a01;
-    let zo = c * w * v[i] - d * za;
+    const zo = c * w * v[i] - d * za;
     za = c * za + d * w * v[i];
-    r = Math.sqrt(a11 * a11 + o1 * o1);
+    r = sqrt(a11 * a11 + o1 * o1);
     if (r > 0) {
       c = a11 / r;
       d = o1 / r;
@@ -92,8 +95,8 @@ function forward(s: Smoother, v: Float64Array, root: number): void {
     }
     // Rows of the panel: p (mean of g″) and q (its linear part), over (value, slope, next value, next slope).
     const h = width[i];
-    const a = root / Math.sqrt(h);
-    const b = Math.sqrt(3) * a;
+    const a = root / sqrt(h);
+    const b = sqrt(3) * a;
     let p1 = -a;
     let p2 = 0;
     let p3 = a;
@@ -104,7 +107,7 @@ function forward(s: Smoother, v: Float64Array, root: number): void {
     let zq = 0;
     const q0 = -q2;
     // Column 0: row a with row q.
-    r = Math.sqrt(a00 * a00 + q0 * q0);
+    r = sqrt(a00 * a00 + q0 * q0);
     c = a00 / r;
     d = q0 / r;
     factor[k] = r;
@@ -117,7 +120,7 @@ function forward(s: Smoother, v: Float64Array, root: number): void {
     factor[k + 4] = c * za + d * zq;
     zq = c * zq - d * za;
     // Column 1: row b with row p, then with row q.
-    r = Math.sqrt(a11 * a11 + p1 * p1);
+    r = sqrt(a11 * a11 + p1 * p1);
     c = a11 / r;
     d = p1 / r;
     let b1 = r;
@@ -127,7 +130,7 @@ function forward(s: Smoother, v: Float64Array, root: number): void {
     p3 = c * p3;
     zp = -d * zb;
     let zbb = c * zb;
-    r = Math.sqrt(b1 * b1 + q1 * q1);
+    r = sqrt(b1 * b1 + q1 * q1);
     c = b1 / r;
     d = q1 / r;
     b1 = r;
@@ -145,7 +148,7 @@ function forward(s: Smoother, v: Float64Array, root: number): void {
     factor[k + 7] = b3;
     factor[k + 8] = zbb;
     // What is left speaks of the next knot: rows p and q, made triangular.
-    r = Math.sqrt(p2 * p2 + q2 * q2);
+    r = sqrt(p2 * p2 + q2 * q2);
     c = r > 0 ? p2 / r : 1;
     d = r > 0 ? q2 / r : 0;
     a00 = r;
@@ -153,7 +156,6 @@ function forward(s: Smoother, v: Float64Array, root: number): void {
     za = c * zp + d * zq;
     a11 = c * q3 - d * p3;
     zb = c * zq - d * zp;
-    zo = 0;
   }
 }
 

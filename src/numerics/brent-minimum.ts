@@ -34,7 +34,7 @@ export function brentMinimum(
     const middle = (low + high) / 2;
     const near = Number.EPSILON ** 0.5 * Math.abs(best) + tolerance / 3;
     if (Math.abs(best - middle) <= 2 * near - (high - low) / 2) return { ok: true, x: best, value: fBest, evaluations };
-    if (evaluations >= MOST_EVALUATIONS) return refuse("no convergence", { at: best, values: { evaluations } });
+    if (evaluations >= MOST_EVALUATIONS) return refuse("no convergence", { at: best, values: { count: evaluations } });
     // Parabola through the three best points, taken when it falls inside and shrinks.
     const r = (best - second) * (fBest - fThird);
     const q = (best - third) * (fBest - fSecond);

@@ -49,7 +49,7 @@ export function brentRoot(
     const near = 2 * Number.EPSILON * Math.abs(best) + tolerance / 2;
     const half = (other - best) / 2;
     if (Math.abs(half) <= near || fBest === 0) return { ok: true, x: best, residual: fBest, evaluations };
-    if (evaluations >= MOST_EVALUATIONS) return refuse("no convergence", { at: best, values: { evaluations, residual: fBest } });
+    if (evaluations >= MOST_EVALUATIONS) return refuse("no convergence", { at: best, values: { count: evaluations, residual: fBest } });
     const trial = Math.abs(stepBefore) >= near && Math.abs(fBefore) > Math.abs(fBest) ? interpolate(before, fBefore, best, fBest, other, fOther) : null;
     if (trial !== null && Math.abs(trial) < Math.min(1.5 * Math.abs(half) - near / 2, Math.abs(stepBefore) / 2) && trial * half > 0) {
       stepBefore = step;

@@ -14,7 +14,7 @@ export function checkColumns(
   names: readonly [string, string] = ["x", "v"],
 ): Refusal | null {
   if (v.length !== x.length) {
-    return refuse("lengths differ", { argument: names[1], values: { length: v.length, expected: x.length } });
+    return refuse("lengths differ", { argument: names[1], values: { count: v.length, expected: x.length } });
   }
   if (x.length < least) return refuse("too few points", { argument: names[0], values: { count: x.length, least } });
   return checkRising(x, names[0]) ?? checkFinite(v, names[1]);

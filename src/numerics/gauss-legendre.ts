@@ -13,7 +13,7 @@ const MOST_STEPS = 20;
  * Source: M. Abramowitz & I. Stegun, Handbook of Mathematical Functions, 25.4.29–30; nodes by Newton's method on P_n.
  */
 export function gaussLegendre(n: number): Outcome<{ node: Float64Array; weight: Float64Array }> {
-  if (!Number.isInteger(n) || n < 1) return refuse("outside range", { argument: "n", values: { value: n, least: 1 } });
+  if (!Number.isInteger(n) || n < 1) return refuse("outside range", { argument: "n", values: { value: n, least: 1, most: Infinity } });
   const node = new Float64Array(n);
   const weight = new Float64Array(n);
   for (let i = 0; i < (n + 1) >> 1; i += 1) {
@@ -28,7 +28,7 @@ export function gaussLegendre(n: number): Outcome<{ node: Float64Array; weight: 
       settled = Math.abs(change) <= 2 * Number.EPSILON;
       if (settled) slope = legendre(n, z)[1];
     }
-    if (!settled) return refuse("no convergence", { argument: "n", values: { value: n } });
+    if (!settled) return refuse("no convergence", { argument: "n", values: { value: n, count: MOST_STEPS } });
     if (2 * i + 1 === n) z = 0;
     node[i] = -z;
     node[n - 1 - i] = z;

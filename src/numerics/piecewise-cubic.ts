@@ -26,7 +26,7 @@ export function cubicAt(
   const { x } = curve;
   const last = x.length - 1;
   if (!(at >= x[0] && at <= x[last])) {
-    return refuse("outside column", { argument: "x", at, values: { first: x[0], last: x[last] } });
+    return refuse("outside column", { argument: "x", at, values: { value: at, least: x[0], most: x[last] } });
   }
   const panel = panelOf(x, at);
   const t = (at - x[panel]) / (x[panel + 1] - x[panel]);

@@ -81,7 +81,7 @@ export function smoothingSpline(
   }
   const n = x.length;
   if (weight) {
-    if (weight.length !== n) return refuse("lengths differ", { argument: "weight", values: { length: weight.length, expected: n } });
+    if (weight.length !== n) return refuse("lengths differ", { argument: "weight", values: { count: weight.length, expected: n } });
     const row = weight.findIndex((w) => !(Number.isFinite(w) && w > 0));
     if (row >= 0) return refuse("not positive", { argument: "weight", row: row + 1, values: { value: weight[row] } });
   }

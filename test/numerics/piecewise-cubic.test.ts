@@ -22,7 +22,7 @@ describe("piecewise cubic", () => {
   });
   it("refuses a place outside the column and a place that is no number", () => {
     for (const x of [-1.0000001, 2.5000001, NaN, Infinity]) {
-      expect(cubicAt(curve, x)).toMatchObject({ ok: false, reason: "outside column", values: { first: -1, last: 2.5 } });
+      expect(cubicAt(curve, x)).toMatchObject({ ok: false, reason: "outside column", values: { value: x, least: -1, most: 2.5 } });
     }
   });
   it("integrates exactly from the first knot to each knot", () => {
