@@ -42,6 +42,51 @@ export const catalogue: readonly CatalogueEntry[] = [
     ]
   },
   {
+    "name": "INPUT_CHECK",
+    "family": "Sheet",
+    "purpose": "Checks an edge-speed column before it is marched and spills the findings as text, so that they can be read where a host hides error sentences.",
+    "parameters": [
+      {
+        "name": "x",
+        "description": "Stations along the wall.",
+        "unit": "length",
+        "optional": false
+      },
+      {
+        "name": "ue",
+        "description": "Edge speed at each station.",
+        "unit": "speed",
+        "optional": false
+      },
+      {
+        "name": "nu",
+        "description": "Kinematic viscosity.",
+        "unit": "length²/time",
+        "optional": false
+      }
+    ],
+    "gives": "A heading row, a verdict row (usable, usable with care, not usable), then check, finding and advice in a row each.",
+    "resultUnit": "text",
+    "limits": [
+      "Finds what can be told from the numbers alone: shape and order of the ranges, signs, spacing, scatter, the curve between stations, the Reynolds number's size."
+    ],
+    "sources": [
+      "Own definition; scatter by generalised cross-validation (Craven & Wahba 1979); the other thresholds are common practice, no source."
+    ],
+    "examples": [
+      {
+        "formula": "=INDEX(WALL.INPUT_CHECK({0;1;2},{1;0;1},1E-5),2,2)",
+        "value": "not usable"
+      }
+    ],
+    "words": [
+      "validate",
+      "verify",
+      "warning",
+      "audit"
+    ]
+  },
+  {
     "name": "LIMITS_OF",
     "family": "Sheet",
     "purpose": "States where a WALL function is valid and how far it is off there, one statement a row.",

@@ -1,0 +1,86 @@
+import { existsSync, mkdirSync, readFileSync, writeFileSync } from "node:fs";
+import { gzipSync } from "node:zlib";
+import { Bench } from "tinybench";
+import { wallFunctions } from "../../src/cells/generated/functions";
+
+// `npm run measure`: times per call and per station, the growth exponent, and bundle sizes; a table on the screen and JSON in test/output/.
+// The named alternative in the same run is the floor: a bare typed-array trapezoid of ue⁵ over the same columns, without any checking.
+const STATIONS = [20, 200, 2_000, 200_000];
+const BUNDLES = ["functions.js", "taskpane.js", "bench.js", "wallsheet.js", "functions.json"];
+const SHORTEST_MS = 400;
+
+interface Timing {
+  stations: number;
+  marchMs: number;
+  perStationNs: number;
+  spreadPercent: number;
+  floorMs: number;
+  ratioToFloor: number;
+}
+
+async function main(): Promise<void> {
+  const timings: Timing[] = [];
+  for (const n of STATIONS) timings.push(await time(n));
+  const sizes = BUNDLES.filter((name) => existsSync(`dist/${name}`)).map((name) => {
+    const raw = readFileSync(`dist/${name}`);
+    return { name, rawKB: round(raw.length / 1024), gzipKB: round(gzipSync(raw).length / 1024) };
+  });
+  const first = timings[1]!;
+  const last = timings.at(-1)!;
+  const growth = Math.log(last.marchMs / first.marchMs) / Math.log(last.stations / first.stations);
+  console.log("THWAITES_MARCH, whole cell call (ranges read, marched, table spilled); floor = bare typed-array trapezoid of ue⁵");
+  console.table(timings);
+  console.log(`growth exponent from ${first.stations} to ${last.stations} stations: ${growth.toFixed(3)}`);
+  console.table(sizes);
+  mkdirSync("test/output", { recursive: true });
+  writeFileSync("test/output/measure.json", JSON.stringify({ node: process.version, timings, growth, sizes }, null, 2));
+}
+
+async function time(n: number): Promise<Timing> {
+  // An invented decelerating flow, short of separation.
+  const stations = Float64Array.from({ length: n }, (_, i) => i / (n - 1));
+  const speed = stations.map((s) => 20 * (1 - 0.1 * s));
+  const x = Array.from(stations, (v) => [v]);
+  const ue = Array.from(speed, (v) => [v]);
+  const march = wallFunctions["THWAITES_MARCH"]!;
+  let kept: unknown;
+  const bench = new Bench({ time: SHORTEST_MS, warmupTime: SHORTEST_MS / 4, iterations: 3 });
+  bench.add("march", () => {
+    kept = march(x, ue, 1.5e-5, null, null, {});
+  });
+  bench.add("floor", () => {
+    kept = floor(stations, speed);
+  });
+  await bench.run();
+  if (kept === undefined) throw new Error("nothing was calculated");
+  const [a, b] = bench.tasks.map((task) => {
+    if (!("latency" in task.result)) throw new Error(`${task.name} did not run`);
+    return task.result.latency;
+  });
+  const marchMs = a!.p50;
+  const floorMs = b!.p50;
+  return {
+    stations: n,
+    marchMs: round(marchMs),
+    perStationNs: round((1e6 * marchMs) / n),
+    spreadPercent: round((100 * (a!.p75 - a!.min)) / marchMs),
+    floorMs: round(floorMs),
+    ratioToFloor: round(marchMs / floorMs),
+  };
+}
+
+function floor(x: Float64Array, ue: Float64Array): Float64Array {
+  const theta2 = new Float64Array(x.length);
+  let sum = 0;
+  for (let i = 1; i < x.length; i++) {
+    sum += 0.5 * (ue[i]! ** 5 + ue[i - 1]! ** 5) * (x[i]! - x[i - 1]!);
+    theta2[i] = (0.45 * 1.5e-5 * sum) / ue[i]! ** 6;
+  }
+  return theta2;
+}
+
+function round(value: number): number {
+  return Number(value.toPrecision(4));
+}
+
+await main();
