@@ -97,7 +97,7 @@ function forward(s: Smoother, v: Float64Array, root: number): void {
     const h = width[i];
     const a = root / sqrt(h);
     const b = sqrt(3) * a;
-    let p1 = -a;
+    const p1 = -a;
     let p2 = 0;
     let p3 = a;
     let zp = 0;

@@ -1,4 +1,4 @@
-import { checkColumns } from "./check-column";
+import { checkColumns, checkFinite } from "./check-column";
 import type { Outcome } from "./outcome";
 import type { PiecewiseCubic } from "./piecewise-cubic";
 
@@ -16,6 +16,9 @@ export function cubicSpline(x: Float64Array, v: Float64Array): Outcome<{ curve: 
   const bad = checkColumns(x, v, 2);
   if (bad) return bad;
   const slope = x.length === 2 ? chordSlopes(x, v) : x.length === 3 ? parabolaSlopes(x, v) : notAKnotSlopes(x, v);
+  // Finite columns so large or so steep that the slopes overflow.
+  const overflow = checkFinite(slope, "v");
+  if (overflow) return overflow;
   return { ok: true, curve: { x: x.slice(), value: v.slice(), slope } };
 }
 

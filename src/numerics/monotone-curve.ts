@@ -1,4 +1,4 @@
-import { checkColumns } from "./check-column";
+import { checkColumns, checkFinite } from "./check-column";
 import type { Outcome } from "./outcome";
 import type { PiecewiseCubic } from "./piecewise-cubic";
 
@@ -24,6 +24,9 @@ export function monotoneCurve(x: Float64Array, v: Float64Array): Outcome<{ curve
     firstGuess(x, v, slope);
     limit(x, v, slope);
   }
+  // Finite columns so large or so steep that the slopes overflow.
+  const overflow = checkFinite(slope, "v");
+  if (overflow) return overflow;
   return { ok: true, curve: { x: x.slice(), value: v.slice(), slope } };
 }
 

@@ -12,6 +12,8 @@ export type Reason =
   | "outside range"
   | "outside column"
   | "curve not positive"
+  | "stagnation not rising"
+  | "start fixed"
   | "no edge found"
   | "edge below profile"
   | "profile undetermined"

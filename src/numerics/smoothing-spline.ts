@@ -1,7 +1,7 @@
 import type { Smoother } from "./banded-smoother";
 import { makeSmoother, smoothAt } from "./banded-smoother";
 import { brentMinimum } from "./brent-minimum";
-import { checkColumns } from "./check-column";
+import { checkColumns, checkFinite } from "./check-column";
 import { cubicSpline } from "./cubic-spline";
 import type { Outcome } from "./outcome";
 import { refuse } from "./outcome";
@@ -200,6 +200,8 @@ function result(
     value: s.value.map((g, i) => line.value + line.slope * (x[i] - line.x) + size * g),
     slope: s.slope.map((m) => line.slope + (size * m) / unit),
   };
+  const overflow = checkFinite(curve.value, "v") ?? checkFinite(curve.slope, "v");
+  if (overflow) return overflow;
   return {
     ok: true,
     curve,

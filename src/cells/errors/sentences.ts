@@ -45,6 +45,16 @@ const SENTENCES: Record<Reason, Sentence> = {
     need: () => "an edge speed that stays above 0 between its stations",
     found: () => "starts a step where the fitted curve dips to 0 or below; add a station there or set edge fit = monotone",
   },
+  "stagnation not rising": {
+    code: "#VALUE!",
+    need: () => "an edge speed that rises linearly from a start at 0",
+    found: () => "starts at 0 with a gradient that is not positive; begin at a station where the speed is above 0 and give start momentum loss",
+  },
+  "start fixed": {
+    code: "#VALUE!",
+    need: () => "no start momentum loss where the layer's start is fixed",
+    found: () => "has edge speed or radius 0, which fixes it; leave the option out",
+  },
   "no edge found": {
     code: "#N/A",
     need: () => "a traverse that reaches the layer's edge",
