@@ -6,6 +6,7 @@
  */
 import { argumentCountFault, argumentPlaces } from "./argument-places";
 import { isEngineError } from "./engine-values";
+import { JOIN_PAIR } from "./excel-functions/text-and-kind";
 import { FormulaError, parseShape, type Expression } from "./formula-shape";
 import { LAMBDA_FUNCTIONS, callLambda, isLambda, lambdaValue } from "./lambda";
 import { CALL_LAMBDA } from "./normalise-formula";
@@ -29,7 +30,7 @@ interface Bound {
   readonly next: number;
 }
 
-const BINARY_FUNCTIONS = { "=": "EQ", "<>": "NE", "<": "LT", ">": "GT", "<=": "LTE", ">=": "GTE", "&": "CONCATENATE", "+": "ADD", "-": "MINUS", "*": "MULTIPLY", "/": "DIVIDE", "^": "POWER" } as const;
+const BINARY_FUNCTIONS = { "=": "EQ", "<>": "NE", "<": "LT", ">": "GT", "<=": "LTE", ">=": "GTE", "&": JOIN_PAIR, "+": "ADD", "-": "MINUS", "*": "MULTIPLY", "/": "DIVIDE", "^": "POWER" } as const;
 const UNARY_FUNCTIONS = { "-": "UMINUS", "+": "UPLUS", "%": "UNARY.PERCENT", "#": "SPILLED.RANGE" } as const;
 const NOTHING_BOUND: Bound = { slotOf: new Map(), next: 0 };
 
@@ -119,12 +120,15 @@ function asMatrix(argument: EngineArgument): EngineArgument {
 }
 
 /** Only the branch taken is evaluated, as in Excel, whenever the test is a single truth value or number. */
-function lazyIf(runs: readonly Run[]): Run {
+function lazyIf(given: readonly Run[]): Run {
   const skipped: EngineValue = { value: null };
+  // Excel gives FALSE where no third argument is written, 0 where it is written and empty.
+  const runs: readonly Run[] = given.length === 2 ? [...given, () => ({ value: false })] : given;
   return (f) => {
     const test = runs[0]!(f);
     const value = test !== undefined && !Array.isArray(test) ? test.value : undefined;
     const decided = typeof value === "boolean" || typeof value === "number";
+    if (value === "") return { value: "#ERROR", message: "IF needs TRUE, FALSE or a number to test, not an empty text." };
     const rest = runs.slice(1).map((run, i) => (decided && Boolean(value) !== (i === 0) ? skipped : run(f)));
     return f.functions["IF"]!(test, ...rest);
   };

@@ -59,6 +59,7 @@ export function storedErrorCode(excelCode: string): string {
 export function sheetValue(value: EngineValue | undefined): SheetValue {
   if (value === undefined || value.value === null || value.value === undefined) return null;
   if (isEngineError(value)) return new SheetError(excelErrorCode(value.value), value.message ? String(value.message) : "");
+  if (typeof value.value === "number" && !Number.isFinite(value.value)) return new SheetError("#NUM!", "The number is too large.");
   return value.value;
 }
 

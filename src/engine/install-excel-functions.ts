@@ -1,5 +1,23 @@
+/**
+ * Seam: Excel's worksheet functions the engine lacks or computes otherwise. Pinned: @odoo/o-spreadsheet 19.3.7, exported
+ * `registries.functionRegistry` (`content`, `replace`), `helpers.arg`; numbers from @formulajs/formulajs 4.6.1 where it agrees
+ * with an independent reference.
+ *
+ * Relies on: `replace` rebuilding the callable that formulas find under a name; an argument declared `number` or `any` without
+ * `range` being applied to each element of an array by the engine; a function's own argument order.
+ * How it would break: `correct` throws for a name that has gone; changed argument orders are caught by the parity table.
+ */
+import { installArrays } from "./excel-functions/arrays";
+import { installCorrections } from "./excel-functions/corrections";
+import { installElementary } from "./excel-functions/elementary";
+import { installStatistics } from "./excel-functions/statistics";
+import { installTextAndKind } from "./excel-functions/text-and-kind";
 import type { EngineLibrary } from "./types";
+
 export function installExcelFunctions(library: EngineLibrary): void {
-  library.addFunction("SIGN", { description: "Sign.", args: [library.helpers.arg("x (number)", "x")], compute: (x) => ({ value: Math.sign(Number((x as { value: unknown }).value)) }) });
-  library.addFunction("LOG.10", { description: "Log.", args: [library.helpers.arg("x (number)", "x")], compute: (x) => ({ value: Math.log10(Number((x as { value: unknown }).value)) }) });
+  installElementary(library);
+  installStatistics(library);
+  installTextAndKind(library);
+  installArrays(library);
+  installCorrections(library);
 }
