@@ -8,8 +8,9 @@
  * planted on the real `globalThis` (`typeof document` goes on telling the truth) and the library's timing messages do not end
  * up on a command's output.
  *
- * `vm.compileFunction` compiles in Node's main realm also when jest runs us in a sandbox of its own; the library and its arrays
- * then belong to another realm than the test. Nothing in this room asks `instanceof` across that border.
+ * The library copies what it is given and refuses objects whose prototype is not its own realm's `Object.prototype`. It must
+ * therefore run in the caller's realm: jest gives each test file a realm of its own, where `vm.compileFunction` (and
+ * `vm.runInThisContext`) would still compile in Node's main one; there the caller's own `Function` compiles the file instead.
  *
  * How it would break: a file that is a module, or that reads another global, fails at once with the message below.
  */
@@ -43,7 +44,10 @@ function locate(folder: string, file: string, below: string): string {
 }
 
 function runScript(file: string, exported: object, scope: Record<string, unknown>): void {
-  const run = vm.compileFunction(fs.readFileSync(file, "utf8"), Object.keys(scope), { filename: file });
+  const code = fs.readFileSync(file, "utf8");
+  const names = Object.keys(scope);
+  const inMainRealm = vm.runInThisContext("Object") === Object;
+  const run: (...args: unknown[]) => unknown = inMainRealm ? (vm.compileFunction(code, names, { filename: file }) as (...args: unknown[]) => unknown) : (globalThis.Function(...names, code) as (...args: unknown[]) => unknown);
   run.apply(exported, Object.values(scope));
 }
 

@@ -72,7 +72,7 @@ function stringWords(word: FormulaWord): FormulaWord[] {
   if (!closed) return [word];
   const inside = word.text.slice(1, -1);
   if (!inside.includes('""') && !inside.endsWith("\\")) return [word];
-  // Cut at every doubled quote, and between a backslash and the quote that follows it.
+  // Cut at every doubled quote, and at each backslash of a run that ends at a quote.
   const result: FormulaWord[] = [mark("(")];
   let chunk = "";
   const cut = (code: number) => {
@@ -83,7 +83,7 @@ function stringWords(word: FormulaWord): FormulaWord[] {
     if (inside.startsWith('""', i)) {
       cut(34);
       i++;
-    } else if (inside[i] === "\\" && (i === inside.length - 1 || inside[i + 1] === '"')) cut(92);
+    } else if (/^\\+(?:"|$)/.test(inside.slice(i))) cut(92);
     else chunk += inside[i];
   }
   result.push({ kind: "string", text: `"${chunk}"` }, mark(")"));

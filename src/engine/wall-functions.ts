@@ -6,7 +6,8 @@ import type { SheetFunction } from "./sheet-function";
 /** The namespace under which every host shows the cell functions. */
 export const NAMESPACE = "WALL";
 
-const FAMILY_CATEGORY_PREFIX = "Wall layer";
+/** The heading under which the bench's function menu lists them. */
+const CATEGORY = "Wall layer";
 
 type CellFunction = (...args: unknown[]) => unknown;
 
@@ -27,7 +28,7 @@ export function wallSheetFunction(entry: CatalogueEntry, cellFunction: CellFunct
   return {
     name: `${NAMESPACE}.${entry.name}`,
     description: entry.purpose,
-    category: FAMILY_CATEGORY_PREFIX,
+    category: CATEGORY,
     parameters: entry.parameters.map(({ name, description, unit, optional }) => ({ name, description: unit ? `${description} [${unit}]` : description, optional })),
     call(args, addresses) {
       const given = entry.parameters.map((_, i) => args[i] ?? null);
