@@ -75,7 +75,7 @@ const excel = {
     }),
     new EmitText("help.html", () => helpPage(catalogue)),
     new EmitText("manifest.xml", () => fs.readFileSync("manifest.xml", "utf8").replaceAll(DEVELOPMENT_ORIGIN, origin)),
-    new CopyWebpackPlugin({ patterns: [{ from: "src/excel/icons/*.png", to: "icons/[name][ext]" }, { from: "src/pane/*.css", to: "[name][ext]" }, "LICENSE"] }),
+    new CopyWebpackPlugin({ patterns: [{ from: "src/excel/icons/*.png", to: "icons/[name][ext]" }, "LICENSE"] }),
   ],
 };
 
