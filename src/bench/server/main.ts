@@ -1,4 +1,4 @@
-import { createServer } from "node:http";
+import { createServer, type Server } from "node:http";
 import type { AddressInfo } from "node:net";
 import { benchHandler } from "./bench-handler";
 import { serverOptions, USAGE } from "./options";
@@ -12,7 +12,7 @@ else if (options.kind === "refused") fail(options.sentence, 2);
 else serve(options.port);
 
 function serve(port: number): void {
-  const server = createServer(benchHandler(__dirname, () => (server.address() as AddressInfo).port));
+  const server: Server = createServer(benchHandler(__dirname, () => (server.address() as AddressInfo).port));
   server.on("error", (error: NodeJS.ErrnoException) => {
     if (error.code === "EADDRINUSE") fail(`Port ${port} is in use; choose another with --port, or leave it out for a free one.`, 1);
     else if (error.code === "EACCES") fail(`Port ${port} may not be used by this account; choose one above 1023, or leave it out for a free one.`, 1);

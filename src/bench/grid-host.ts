@@ -1,0 +1,119 @@
+import { excelErrorCode } from "../engine/engine-values";
+import type { EngineEvaluatedCell, EnginePosition, EngineZone } from "../engine/types";
+import { blockAddress, type CellBlock } from "../pane/cell-block";
+import { calledFunctions } from "../pane/form-formula";
+import type { ChartRequest, HostCell, HostValue, SheetHost, WallCell } from "../pane/sheet-host";
+import { chartFigure } from "./chart-figure";
+import type { GridModel } from "./grid-library";
+
+/** The pane's view of the grid. */
+export function gridHost(model: GridModel): SheetHost {
+  const getters = model.getters;
+
+  function sheetId(name: string): string {
+    const found = getters.getSheetIds().find((id) => getters.getSheetName(id) === name);
+    if (found === undefined) throw new Error(`There is no sheet "${name}" in this book.`);
+    return found;
+  }
+  const first = (block: CellBlock): EnginePosition => ({ sheetId: sheetId(block.sheet), col: block.left, row: block.top });
+  const blockOf = (id: string, zone: EngineZone): CellBlock => ({ sheet: getters.getSheetName(id), left: zone.left, top: zone.top, right: zone.right, bottom: zone.bottom });
+  const zoneOf = ({ left, top, right, bottom }: CellBlock): EngineZone => ({ left, top, right, bottom });
+
+  function cellAt(at: EnginePosition): HostCell {
+    const evaluated = getters.getEvaluatedCell(at);
+    const formula = formulaAt(at);
+    const source = getters.getArrayFormulaSpreadingOn(at);
+    const spilledFrom = source && (source.col !== at.col || source.row !== at.row) ? blockOf(at.sheetId, { left: source.col, right: source.col, top: source.row, bottom: source.row }) : undefined;
+    const error = errorOf(evaluated);
+    return { value: error ? null : (evaluated.value as HostValue), text: evaluated.formattedValue, ...(formula !== undefined && { formula }), ...(error && { error }), ...(spilledFrom && { spilledFrom }) };
+  }
+  function formulaAt(at: EnginePosition): string | undefined {
+    const cell = getters.getCell(at);
+    return cell?.isFormula ? (cell.compiledFormula?.toFormulaString(getters) ?? cell.content) : undefined;
+  }
+  function command(name: string, payload: Record<string, unknown>, sentence: string): void {
+    const { isSuccessful, reasons } = model.dispatch(name, payload);
+    if (!isSuccessful) throw new Error(`${sentence} (${reasons.join(", ")}).`);
+  }
+
+  return {
+    name: "the bench",
+
+    async selection() {
+      return blockOf(getters.getActiveSheetId(), getters.getSelectedZone());
+    },
+
+    async read(block) {
+      const id = sheetId(block.sheet);
+      const right = Math.max(block.left, Math.min(block.right, getters.getNumberCols(id) - 1));
+      const bottom = Math.max(block.top, Math.min(block.bottom, getters.getNumberRows(id) - 1));
+      if (block.left >= getters.getNumberCols(id) || block.top >= getters.getNumberRows(id)) return [[{ value: null, text: "" }]];
+      const rows: HostCell[][] = [];
+      for (let row = block.top; row <= bottom; row++) {
+        const cells: HostCell[] = [];
+        for (let col = block.left; col <= right; col++) cells.push(cellAt({ sheetId: id, col, row }));
+        rows.push(cells);
+      }
+      return rows;
+    },
+
+    async writeFormula(at, formula) {
+      command("UPDATE_CELL", { ...first(at), content: formula }, `The formula could not be written into ${blockAddress(at)}`);
+    },
+
+    async writeValues(at, rows) {
+      const { sheetId: id, col, row } = first(at);
+      const content = rows.map((values) => values.map((value) => (value === null ? "" : String(value))));
+      command("PASTE_FROM_OS_CLIPBOARD", { target: [{ left: col, right: col, top: row, bottom: row }], clipboardContent: { "text/plain": content.map((line) => line.join("\t")).join("\n") }, sheetId: id }, `The values could not be written at ${blockAddress(at)}`);
+    },
+
+    async insertChart(chart: ChartRequest) {
+      const id = sheetId(chart.at.sheet);
+      const figure = chartFigure(chart, `chart-${Date.now().toString(36)}`);
+      command("CREATE_CHART", { sheetId: id, figureId: figure.id, chartId: figure.data.chartId, col: figure.col, row: figure.row, offset: figure.offset, size: { width: figure.width, height: figure.height }, definition: figure.data }, "The chart could not be drawn");
+    },
+
+    async wallCells() {
+      const found: WallCell[] = [];
+      for (const id of getters.getSheetIds()) {
+        for (let row = 0; row < getters.getNumberRows(id); row++) {
+          for (let col = 0; col < getters.getNumberCols(id); col++) {
+            const at = { sheetId: id, col, row };
+            const formula = formulaAt(at);
+            if (formula === undefined || calledFunctions(formula).length === 0) continue;
+            const own = { left: col, right: col, top: row, bottom: row };
+            const error = errorOf(getters.getEvaluatedCell(at));
+            found.push({ at: blockOf(id, own), formula, spill: blockOf(id, getters.getSpreadZone(at) ?? own), ...(error && { error }) });
+          }
+        }
+      }
+      return found;
+    },
+
+    async goTo(block) {
+      const id = sheetId(block.sheet);
+      const active = getters.getActiveSheetId();
+      if (id !== active) command("ACTIVATE_SHEET", { sheetIdFrom: active, sheetIdTo: id }, `The sheet ${block.sheet} could not be shown`);
+      model.selection.selectZone({ cell: { col: block.left, row: block.top }, zone: zoneOf(block) });
+    },
+
+    whenChanged(listener) {
+      const owner = {};
+      let waiting = false;
+      model.on("update", owner, () => {
+        if (waiting) return; // one call for all updates before the next frame
+        waiting = true;
+        requestAnimationFrame(() => {
+          waiting = false;
+          listener();
+        });
+      });
+      return () => model.off("update", owner);
+    },
+  };
+}
+
+function errorOf(cell: EngineEvaluatedCell): HostCell["error"] {
+  if (cell.type !== "error") return undefined;
+  return { code: excelErrorCode(String(cell.value)), sentence: String(cell.message ?? "") };
+}

@@ -1,0 +1,135 @@
+import { CAUTIONS } from "../cells/cautions";
+import { readAddress, type CellBlock } from "../pane/cell-block";
+import { chartFigure } from "./chart-figure";
+
+/**
+ * The book the bench opens on: an invented survey glider's wing section, upper side. The edge speeds are made up with the shape an
+ * inviscid solution of such a section has (stagnation point, quick rise, long gentle rise, slow fall); they are nobody's data.
+ */
+const SHEET = "Wing section";
+const STATIONS: readonly (readonly [x: number, ue: number])[] = [
+  [0, 0],
+  [0.005, 6.42],
+  [0.01, 11.93],
+  [0.02, 19.36],
+  [0.035, 24.27],
+  [0.055, 26.35],
+  [0.08, 27.33],
+  [0.11, 28.1],
+  [0.145, 28.78],
+  [0.185, 29.29],
+  [0.225, 29.52],
+  [0.265, 29.47],
+  [0.305, 29.18],
+  [0.345, 28.7],
+  [0.385, 28.09],
+];
+const VISCOSITY = 1.5e-5;
+const COLUMNS = "station, edge_speed, momentum_loss, defect, shape, friction, mass_defect, state";
+
+/** Rows counted from 1, as in the sheet. */
+const HEADING_ROW = 18;
+const FIRST = HEADING_ROW + 1;
+const LAST = HEADING_ROW + STATIONS.length;
+
+const STYLES = {
+  1: { bold: true, fontSize: 14 },
+  2: { textColor: "#545d63", italic: true },
+  3: { textColor: "#6d4a00" },
+  4: { bold: true, wrapping: "wrap", verticalAlign: "bottom" },
+  5: { fillColor: "#eaf3f5" },
+  6: { textColor: "#545d63", align: "right" },
+  7: { bold: true, align: "right", wrapping: "wrap", verticalAlign: "bottom" },
+} as const;
+const FORMATS = { 1: "0.000", 2: "0.00", 3: "0.00e", 4: "0.000000", 5: "0.00000", 6: "0.0000" } as const;
+
+/** The starter book in the grid library's data form (version 19.3.2). */
+export function starterBook(): Record<string, unknown> {
+  const cells: Record<string, string> = {
+    A1: "Survey glider, wing section, upper side: laminar layer from the stagnation point",
+    A2: "Invented scenario, invented numbers: no such aircraft. Edge speed shaped like an inviscid solution at 22 m/s, chord 0.60 m.",
+    A3: CAUTIONS[0]!,
+    A5: "Settings",
+    A6: "kinematic viscosity ν [m²/s]",
+    B6: String(VISCOSITY),
+    A8: "Options of the march",
+    A9: "edge fit",
+    B9: "spline",
+    A10: "columns",
+    B10: COLUMNS,
+    A12: "Change a shaded cell: the table and both charts follow.",
+    [`A${HEADING_ROW - 1}`]: "m",
+    [`B${HEADING_ROW - 1}`]: "m/s",
+    [`A${HEADING_ROW}`]: "station x",
+    [`B${HEADING_ROW}`]: "edge speed ue",
+    [`D${HEADING_ROW}`]: `=WALL.THWAITES_MARCH(A${FIRST}:A${LAST},B${FIRST}:B${LAST},B6,A9:B10)`,
+    [`M${HEADING_ROW - 1}`]: "m/s",
+    [`M${HEADING_ROW}`]: "blow velocity dm/dx",
+    [`M${FIRST}`]: `=WALL.WALL_BLOW_VELOCITY(A${FIRST}:A${LAST},WALL.COLUMN_OF(D${HEADING_ROW}#,"mass_defect"))`,
+    [`O${HEADING_ROW}`]: "shape factor H by COLUMN_OF",
+    [`O${FIRST}`]: `=WALL.COLUMN_OF(D${HEADING_ROW}#,"shape")`,
+  };
+  ["m", "m/s", "m", "m", "1", "1", "m²/s"].forEach((unit, i) => (cells[`${"DEFGHIJ"[i]}${HEADING_ROW - 1}`] = unit));
+  STATIONS.forEach(([x, ue], i) => {
+    cells[`A${FIRST + i}`] = String(x);
+    cells[`B${FIRST + i}`] = String(ue);
+  });
+  const rows = (column: string) => `${column}${FIRST}:${column}${LAST}`;
+  return {
+    version: "19.3.2",
+    sheets: [
+      {
+        id: "wing",
+        name: SHEET,
+        rowNumber: 100,
+        colNumber: 26,
+        cells,
+        cols: Object.fromEntries([[0, 190], [1, 100], [2, 20], ...[3, 4, 5, 6, 7, 8, 9, 10].map((c) => [c, 92]), [11, 20], [12, 100], [13, 20], [14, 110]].map(([c, size]) => [c, { size }])),
+        rows: { [HEADING_ROW - 1]: { size: 40 } },
+        styles: {
+          A1: 1,
+          A2: 2,
+          A3: 3,
+          A5: 4,
+          A8: 4,
+          B6: 5,
+          B9: 5,
+          B10: 5,
+          A12: 2,
+          [`A${HEADING_ROW - 1}:O${HEADING_ROW - 1}`]: 6,
+          [`A${HEADING_ROW}:O${HEADING_ROW}`]: 7,
+          [`A${FIRST}:B${LAST}`]: 5,
+        },
+        formats: { B6: 3, [rows("A")]: 1, [rows("B")]: 2, [rows("D")]: 1, [rows("E")]: 2, [`F${FIRST}:G${LAST}`]: 4, [rows("H")]: 1, [rows("I")]: 5, [rows("J")]: 5, [rows("M")]: 6, [rows("O")]: 1 },
+        figures: [
+          chartFigure(
+            {
+              title: "Thicknesses",
+              x: block(rows("D")),
+              xLabel: "station x [m]",
+              series: [
+                { label: "momentum loss θ", values: block(rows("F")) },
+                { label: "defect thickness δ*", values: block(rows("G")) },
+              ],
+              yLabel: "thickness [m]",
+              at: block("D5"),
+            },
+            "thicknesses",
+            { width: 318, height: 262 },
+          ),
+          chartFigure(
+            { title: "Blow velocity at the wall", x: block(rows("A")), xLabel: "station x [m]", series: [{ label: "blow velocity dm/dx", values: block(rows("M")) }], yLabel: "dm/dx [m/s]", at: block("G5") },
+            "blow-velocity",
+            { width: 318, height: 262 },
+          ),
+        ],
+      },
+    ],
+    styles: STYLES,
+    formats: FORMATS,
+  };
+}
+
+function block(address: string): CellBlock {
+  return readAddress(address, SHEET)!;
+}

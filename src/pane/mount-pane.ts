@@ -1,0 +1,73 @@
+import { CAUTIONS } from "../cells/cautions";
+import type { CatalogueEntry } from "../cells/catalogue-entry";
+import { element } from "./element";
+import { functionCard, type FunctionCard } from "./function-card";
+import { functionList } from "./function-list";
+import { selectedCell } from "./selected-cell";
+import type { SheetHost } from "./sheet-host";
+
+export interface Pane {
+  /** Opens a function's card by its name without namespace; an unknown name shows the list. */
+  open(name: string): void;
+  /** Takes the pane out of the page and ends its listening. */
+  close(): void;
+}
+
+/** Builds the pane inside `root` (its style sheet is pane.css) and lets it follow the host's selection. */
+export function mountPane(root: HTMLElement, host: SheetHost, catalogue: readonly CatalogueEntry[]): Pane {
+  const status = element("p", { class: "wl-status", role: "status" });
+  const say = (sentence: string, isFault = false) => {
+    status.textContent = sentence;
+    status.classList.toggle("wl-fault", isFault);
+  };
+  const complain = (error: unknown) => say(error instanceof Error ? error.message : String(error), true);
+
+  const body = element("div", { class: "wl-body" });
+  let card: FunctionCard | undefined;
+  const list = functionList(catalogue, (entry) => showCard(entry), say);
+  const cell = selectedCell(catalogue, host, (entry) => showCard(entry));
+
+  function showCard(entry: CatalogueEntry): void {
+    const shown = functionCard(entry, host, () => showList(entry.name), say);
+    card = shown;
+    say("");
+    body.replaceChildren(shown.root);
+    body.scrollTop = 0;
+    shown.focus();
+    shown.form.fill().catch(complain);
+  }
+  function showList(name?: string): void {
+    card = undefined;
+    say("");
+    body.replaceChildren(list.root);
+    list.focusOn(name);
+  }
+  const update = () => {
+    cell.update().catch(complain);
+    card?.form.follow().catch(complain);
+  };
+
+  body.append(list.root);
+  root.classList.add("wl-pane");
+  root.replaceChildren(
+    element("header", { class: "wl-header" }, element("h1", {}, "Wallsheet"), element("span", { class: "wl-quiet" }, `functions in ${host.name}`)),
+    cell.root,
+    body,
+    status,
+    element("aside", { class: "wl-cautions", "aria-label": "Cautions" }, ...CAUTIONS.map((caution) => element("p", {}, caution))),
+  );
+  const stop = host.whenChanged(update);
+  update();
+  return {
+    open(name) {
+      const entry = catalogue.find((e) => e.name === name);
+      if (entry) showCard(entry);
+      else showList();
+    },
+    close() {
+      stop();
+      root.replaceChildren();
+      root.classList.remove("wl-pane");
+    },
+  };
+}
