@@ -19,6 +19,9 @@ export type Reason =
   | "profile undetermined"
   | "fit undetermined"
   | "noise undetermined"
+  | "no similar layer"
+  | "no reversed layer"
+  | "layer lifts off"
   | "no convergence";
 
 /** A refusal: what is wrong and where. */
