@@ -72,6 +72,21 @@ const SENTENCES: Record<Reason, Sentence> = {
     need: () => "a column from which the noise can be told",
     found: () => "cross-validation finds no minimum; give the noise as a number",
   },
+  "no similar layer": {
+    code: "#N/A",
+    need: (a, v) => `${a} of at least ${v("least")}, below which no similar layer exists`,
+    found: (v) => `has ${v("value")}`,
+  },
+  "no reversed layer": {
+    code: "#N/A",
+    need: (a, v) => `${a} between ${v("least")} and ${v("most")} for the reversed branch`,
+    found: (v) => `has ${v("value")}`,
+  },
+  "layer lifts off": {
+    code: "#N/A",
+    need: (a) => `${a} that leaves the layer on the wall`,
+    found: () => "blows strongly enough to lift it off",
+  },
   "no convergence": {
     code: "#N/A",
     need: () => "an iteration that settles",
