@@ -6,6 +6,9 @@ import { asNumber, fail } from "./elementary";
 import { normalDensity, normalProbability, normalQuantile } from "./error-function";
 import { studentTwoTails, studentTwoTailsQuantile } from "./student";
 
+/**
+ * Adds them. F with one degree of freedom above is Student's t squared; formulajs is good to 1e-9 only there.
+ */
 export function installStatistics(library: EngineLibrary): void {
   const pooled = (name: string, description: string, least: number, f: (numbers: number[]) => number) =>
     addMissing(library, name, description, ["number (any, range, repeating)"], (...args) => {
@@ -45,8 +48,8 @@ export function installStatistics(library: EngineLibrary): void {
   numbers(["NORM.S.INV", "NORMSINV"], "Number below which a share of the standard normal distribution lies.", "probability", (p) => normalQuantile(share("NORM.S.INV", p)));
   numbers(["CONFIDENCE.NORM", "CONFIDENCE"], "Half width of a confidence interval, standard deviation known.", "alpha standard_deviation size", (a, s, n) => (positive("CONFIDENCE.NORM", s) * normalQuantile(1 - share("CONFIDENCE.NORM", a) / 2)) / Math.sqrt(n));
   numbers(["CONFIDENCE.T"], "Half width of a confidence interval by Student's t.", "alpha standard_deviation size", (a, s, n) => (positive("CONFIDENCE.T", s) * studentTwoTailsQuantile(share("CONFIDENCE.T", a), atLeastOne(n - 1))) / Math.sqrt(n));
-  numbers(["F.DIST.RT", "FDIST"], "Right tail of the F distribution.", "x degrees1 degrees2", (x, a, b) => asNumber(formulajs.F.DIST.RT(x, a, b)));
-  numbers(["F.INV.RT", "FINV"], "Number above which a share of the F distribution lies.", "probability degrees1 degrees2", (p, a, b) => asNumber(formulajs.F.INV.RT(share("F.INV.RT", p), a, b)));
+  numbers(["F.DIST.RT", "FDIST"], "Right tail of the F distribution.", "x degrees1 degrees2", (x, a, b) => (Math.trunc(a) === 1 && x >= 0 ? studentTwoTails(Math.sqrt(x), atLeastOne(b)) : asNumber(formulajs.F.DIST.RT(x, a, b))));
+  numbers(["F.INV.RT", "FINV"], "Number above which a share of the F distribution lies.", "probability degrees1 degrees2", (p, a, b) => (Math.trunc(a) === 1 ? studentTwoTailsQuantile(share("F.INV.RT", p), atLeastOne(b)) ** 2 : asNumber(formulajs.F.INV.RT(share("F.INV.RT", p), a, b))));
   numbers(["T.DIST.2T"], "Both tails of Student's t distribution.", "x degrees", (x, n) => (x < 0 ? fail("T.DIST.2T needs x of at least 0.") : studentTwoTails(x, atLeastOne(n))));
   numbers(["T.DIST.RT"], "Right tail of Student's t distribution.", "x degrees", (x, n) => (x < 0 ? 1 - studentTwoTails(-x, atLeastOne(n)) / 2 : studentTwoTails(x, atLeastOne(n)) / 2));
   numbers(["T.INV.2T", "TINV"], "Number outside which a share of Student's t distribution lies.", "probability degrees", (p, n) => studentTwoTailsQuantile(share("T.INV.2T", p), atLeastOne(n)));
