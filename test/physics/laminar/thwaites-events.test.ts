@@ -22,7 +22,7 @@ describe("how a march begins and ends", () => {
     const one = marchOf(coarse, coarse.map(ue), 1, { startMomentumLoss: start, afterSeparation: "continue" });
     expect(separationOf(one).x).toBeCloseTo(separationOf(many).x, 8);
     expect(one.reached).toBe(1);
-    expect(one.gradient[0]).toBe(0);
+    expect(Math.abs(one.gradient[0])).toBeLessThan(1e-9);
     expect(Math.abs(one.gradient[1])).toBeLessThan(1e-9);
     // A slightly thinner layer passes the dip.
     expect(marchOf(coarse, coarse.map(ue), 1, { startMomentumLoss: start - 0.005 }).stop.kind).toBe("end");
