@@ -126,7 +126,8 @@ function lazyIf(given: readonly Run[]): Run {
   const runs: readonly Run[] = given.length === 2 ? [...given, () => ({ value: false })] : given;
   return (f) => {
     const test = runs[0]!(f);
-    const value = test !== undefined && !Array.isArray(test) ? test.value : undefined;
+    const single = !Array.isArray(test) ? test : test.length === 1 && test[0]!.length === 1 ? test[0]![0] : undefined;
+    const value = single?.value;
     const decided = typeof value === "boolean" || typeof value === "number";
     if (value === "") return { value: "#ERROR", message: "IF needs TRUE, FALSE or a number to test, not an empty text." };
     const rest = runs.slice(1).map((run, i) => (decided && Boolean(value) !== (i === 0) ? skipped : run(f)));

@@ -102,8 +102,28 @@ describe("formulas in a book", () => {
   });
 
   it("evaluates only the branch of IF that is taken, so a guarded cell is no circle", () => {
-    const model = book(engine, { A1: "=IF(TRUE,1,B1)", B1: "=A1+1" });
-    expect([valueAt(model, "A1"), valueAt(model, "B1")]).toEqual([1, 2]);
+    const model = book(engine, { A1: "=IF(C1,1,B1)", B1: "=A1+1", C1: "TRUE", D1: "=IF(C1:C2,A1,7)" });
+    expect(["A1", "B1", "D1", "D2"].map((xc) => valueAt(model, xc))).toEqual([1, 2, 1, 7]);
+  });
+
+  it("copies, pastes and undoes text with Excel's spellings", () => {
+    const model = book(engine, { B1: "10", B4: "1000", F1: '=LOG10(B1)&"x""y"' });
+    const selection = (model as unknown as { selection: { selectCell(col: number, row: number): void } }).selection;
+    selection.selectCell(5, 0);
+    expect(model.dispatch("COPY").isSuccessful).toBe(true);
+    expect(model.dispatch("PASTE", { target: [{ left: 5, right: 5, top: 3, bottom: 3 }] }).isSuccessful).toBe(true);
+    expect([textAt(model, "F4"), valueAt(model, "F4")]).toEqual(['=LOG10(B4)&"x""y"', '3x"y']);
+    model.dispatch("REQUEST_UNDO");
+    expect(textAt(model, "F4")).toBeUndefined();
+  });
+
+  it("saves and reads a column of like formulas, which the engine stores as differences", () => {
+    const cells: Record<string, string> = {};
+    for (let i = 1; i <= 8; i++) Object.assign(cells, { [`B${i}`]: `${10 ** i}`, [`A${i}`]: `=LOG10(B${i}) & "a""b${i}"`, [`C${i}`]: `=-B${i}^2 + @B1:B8`, [`D${i}`]: `=LET(q, B${i}*${i}, q+1)` });
+    const model = book(engine, cells);
+    const again = new library.Model(JSON.parse(JSON.stringify(model.exportData())));
+    for (const xc of Object.keys(cells)) expect([xc, textAt(again, xc), valueAt(again, xc)]).toEqual([xc, textAt(model, xc), valueAt(model, xc)]);
+    expect([textAt(again, "A7"), valueAt(again, "A7"), valueAt(again, "C3"), valueAt(again, "D8")]).toEqual(['=LOG10(B7) & "a""b7"', '7a"b7', 1e6 + 1e3, 8e8 + 1]);
   });
 
   it("calls a bad formula bad, and does not ask a registry for names that LET made", () => {

@@ -1,7 +1,7 @@
 /** Array functions whose arguments mean something else in the engine (19.3.7) than in Excel, and those it lacks. */
 import { isEngineError } from "../engine-values";
 import type { EngineArgument, EngineLibrary, EngineMatrix, EngineValue } from "../types";
-import { ExcelError, addMissing, correct, define, numberOf, rowFirst } from "./define";
+import { ExcelError, addMissing, define, numberOf, rowFirst } from "./define";
 import { fail } from "./elementary";
 
 const NOT_AVAILABLE: EngineValue = { value: "#N/A", message: "The arrays differ in size." };
@@ -54,7 +54,6 @@ function padWithNotAvailable(library: EngineLibrary, name: string, position: num
       return original.apply(this, [...args.slice(0, position), args[position] ?? { value: "#N/A", message: "There is nothing to fill this place with." }]);
     },
   });
-  correct(library, name, () => undefined);
 }
 
 function stack(matrices: EngineMatrix[]): EngineMatrix {
