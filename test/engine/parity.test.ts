@@ -115,6 +115,9 @@ const CHOICES: readonly Row[] = [
   ['=XLOOKUP(5,{1;2;3},{10;20;30},"none")', "none"],
   ["=VLOOKUP(2,{1,10;2,20},2,FALSE)", 20],
   ["=INDEX({1,2;3,4},2,1)", 3],
+  ["=INDEX({1,2,3},2)", 2],
+  ["=INDEX({1;2;3},2)", 2],
+  ["=SUM(INDEX({1,2;3,4},0,2))", 6],
   ["=INDEX({1,2;3,4},2,0)", [[3, 4]]],
 ];
 
@@ -288,6 +291,7 @@ const ERRORS: readonly Row[] = [
   ["=SQRT(1/0)", error("#DIV/0!")],
   ['=IF("",1,2)', error("#VALUE!")],
   ["=INDEX({1,2;3,4},3,1)", error("#REF!")],
+  ["=INDEX({1,2,3},4)", error("#REF!")],
   ['=MATCH("x",{1,2,3},0)', error("#N/A")],
   ["=XMATCH(9,{1,2,3})", error("#N/A")],
   ["=IFS(FALSE,1)", error("#N/A")],

@@ -15,6 +15,7 @@ export function installCorrections(library: EngineLibrary): void {
     correct(library, name, (given, args) => (isGeneralError(given) && args.every(canBeNumber) ? fail((given as EngineValue).message ?? "The number is out of range.") : undefined));
   }
   for (const name of NO_MATCH_IS_NA) correct(library, name, (given, args) => (isGeneralError(given) && !args.some(holdsError) ? fail((given as EngineValue).message ?? "No match.", "#N/A") : undefined));
+  indexAlongARow(library);
   correct(library, "INDEX", (given, args) => (isGeneralError(given) && !args.some(holdsError) ? fail((given as EngineValue).message ?? "Out of range.", "#REF!") : undefined));
   correct(library, "POWER", (given, args) => {
     if (isGeneralError(given) && args.every(canBeNumber)) fail((given as EngineValue).message ?? "The power has no real value.");
@@ -30,6 +31,21 @@ export function installCorrections(library: EngineLibrary): void {
     return { ...(given as EngineValue), value: roundDecimal(numberOf(args[0]), Math.trunc(numberOf(args[1]))) };
   });
   correctText(library);
+}
+
+/** INDEX of a single row with one number counts along the row; the engine counts rows. */
+function indexAlongARow(library: EngineLibrary): void {
+  const registry = library.registries.functionRegistry;
+  const entry = registry.content.INDEX!;
+  const original = entry.compute;
+  registry.replace("INDEX", {
+    ...entry,
+    compute(...args) {
+      const [reference, place] = args;
+      const isRow = args.length === 2 && Array.isArray(reference) && reference.length > 1 && reference[0]!.length === 1;
+      return isRow ? original.call(this, reference, { value: 1 }, place) : original.apply(this, args);
+    },
+  });
 }
 
 /** TEXT with a format such as 0.00E+00, which the engine's format reader does not know. */
