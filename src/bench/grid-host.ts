@@ -3,6 +3,7 @@ import type { EngineEvaluatedCell, EnginePosition, EngineZone } from "../engine/
 import { blockAddress, type CellBlock } from "../pane/cell-block";
 import { calledFunctions } from "../pane/form-formula";
 import type { ChartRequest, HostCell, HostValue, SheetHost, WallCell } from "../pane/sheet-host";
+import { typedContent, WRITE_CELLS } from "./block-writer";
 import { chartFigure } from "./chart-figure";
 import type { GridModel } from "./grid-library";
 
@@ -63,8 +64,10 @@ export function gridHost(model: GridModel): SheetHost {
 
     async writeValues(at, rows) {
       const { sheetId: id, col, row } = first(at);
-      const content = rows.map((values) => values.map((value) => (value === null ? "" : String(value))));
-      command("PASTE_FROM_OS_CLIPBOARD", { target: [{ left: col, right: col, top: row, bottom: row }], clipboardContent: { "text/plain": content.map((line) => line.join("\t")).join("\n") }, sheetId: id }, `The values could not be written at ${blockAddress(at)}`);
+      const width = Math.max(0, ...rows.map((values) => values.length));
+      if (col + width > getters.getNumberCols(id) || row + rows.length > getters.getNumberRows(id)) throw new Error(`The values do not fit on the sheet at ${blockAddress(at)}.`);
+      const cells = rows.flatMap((values, r) => values.map((value, c) => ({ col: col + c, row: row + r, content: typedContent(value) })));
+      command(WRITE_CELLS, { sheetId: id, cells }, `The values could not be written at ${blockAddress(at)}`);
     },
 
     async insertChart(chart: ChartRequest) {

@@ -18,6 +18,8 @@ export interface GridMenuItem {
 export interface GridLibrary extends EngineLibrary {
   Model: new (data?: unknown, config?: unknown) => GridModel;
   Spreadsheet: unknown;
+  /** Base of plugins; `dispatch` inside `handle` makes sub-commands. */
+  UIPlugin: new (config: unknown) => { dispatch(command: string, payload: Record<string, unknown>): unknown };
   DEFAULT_LOCALES: unknown[];
 }
 

@@ -2,6 +2,7 @@ import { catalogue } from "../cells/generated/catalogue";
 import { prepareEngine } from "../engine/prepare-engine";
 import { wallSheetFunctions } from "../engine/wall-functions";
 import { mountPane } from "../pane/mount-pane";
+import { installBlockWriter } from "./block-writer";
 import { dialogs } from "./dialogs";
 import { gridHost } from "./grid-host";
 import { pageLibraries, type GridModel } from "./grid-library";
@@ -17,6 +18,7 @@ declare global {
 async function start(): Promise<void> {
   const { owl, library } = pageLibraries();
   prepareEngine(library, wallSheetFunctions());
+  installBlockWriter(library);
   trimMenus(library);
   const model = new library.Model(starterBook());
   await mountGrid(owl, library, model, byId("grid"), dialogs(byId("notice")));
