@@ -38,6 +38,6 @@ module.exports = {
     doNotFollow: { path: "node_modules" },
     tsConfig: { fileName: "tsconfig.json" },
     tsPreCompilationDeps: true,
-    enhancedResolveOptions: { extensions: [".ts", ".js", ".mjs", ".json"] },
+    enhancedResolveOptions: { extensions: [".ts", ".js", ".mjs", ".json"], exportsFields: ["exports"], conditionNames: ["import", "require", "node", "default"] },
   },
 };
