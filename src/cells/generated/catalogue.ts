@@ -3,6 +3,294 @@ import type { CatalogueEntry } from "../catalogue-entry";
 
 export const catalogue: readonly CatalogueEntry[] = [
   {
+    "name": "EDGE_SPEED",
+    "family": "Edge",
+    "purpose": "Gives the edge speed along a wall from its pressure coefficients, one row each.",
+    "parameters": [
+      {
+        "name": "cp",
+        "description": "Pressure coefficients, referred to the reference flow.",
+        "unit": "1",
+        "optional": false
+      },
+      {
+        "name": "reference_speed",
+        "description": "Speed of the reference flow.",
+        "unit": "speed",
+        "optional": false
+      },
+      {
+        "name": "mach",
+        "description": "Mach number of the reference flow; omitted or 0: constant density (Bernoulli), otherwise isentropic with ratio of specific heats 1.4.",
+        "unit": "1",
+        "optional": true
+      }
+    ],
+    "gives": "Edge speed ue, one entry a row.",
+    "resultUnit": "speed",
+    "limits": [
+      "cp from vacuum, −2/(1.4 M²), to stagnation, 1 without a Mach number and 1 + M²/4 + … with it; a value outside is refused with its row.",
+      "No shock between the reference flow and the wall, and the same total pressure: not behind a shock, in a wake or in a separated region."
+    ],
+    "sources": [
+      "Ames Research Staff, NACA Report 1135 (1953), isentropic relations, equations 43, 44 and 50; Bernoulli's equation as their limit at small Mach number."
+    ],
+    "examples": [
+      {
+        "formula": "=SUM(WALL.EDGE_SPEED({1;0.75;0;-3},10))",
+        "value": 35
+      },
+      {
+        "formula": "=INDEX(WALL.EDGE_SPEED({1;0;-1},100,0.5),3,1)",
+        "value": 143.8612
+      }
+    ],
+    "words": [
+      "pressure",
+      "velocity",
+      "cp",
+      "Bernoulli",
+      "isentropic",
+      "tap"
+    ]
+  },
+  {
+    "name": "GRADIENT_OF",
+    "family": "Edge",
+    "purpose": "Gives the gradient dv/dx of a column, smoothed as far as its noise asks for, one row each.",
+    "parameters": [
+      {
+        "name": "x",
+        "description": "Stations, rising.",
+        "unit": "any",
+        "optional": false
+      },
+      {
+        "name": "v",
+        "description": "Values at the stations.",
+        "unit": "any",
+        "optional": false
+      },
+      {
+        "name": "noise",
+        "description": "Standard deviation of the noise of one value; omitted or \"found\": found by cross-validation; 0: the spline through all points.",
+        "unit": "unit of v",
+        "optional": true
+      }
+    ],
+    "gives": "Gradient dv/dx at the stations, one entry a row.",
+    "resultUnit": "unit of v / unit of x",
+    "limits": [
+      "At least 6 points where the noise is to be found, 3 where it is given, 2 for noise 0. Noise 0 reproduces the gradient of any cubic; its error falls with the third power of the spacing.",
+      "A smoothed gradient is least certain at the two ends; finding the noise needs enough points (see SMOOTH_COLUMN)."
+    ],
+    "sources": [
+      "C. de Boor, A Practical Guide to Splines (1978), ch. IV (noise 0); C. H. Reinsch, Numer. Math. 10 (1967) 177–183 (smoothing spline).",
+      "P. Craven & G. Wahba, Numer. Math. 31 (1979) 377–403 (how much is smoothed)."
+    ],
+    "examples": [
+      {
+        "formula": "=ROUND(INDEX(WALL.GRADIENT_OF({0;1;2;3;4},{0;1;8;27;64},0),3,1),9)",
+        "value": 12
+      }
+    ],
+    "words": [
+      "derivative",
+      "slope",
+      "differentiate",
+      "spline"
+    ]
+  },
+  {
+    "name": "SMOOTH_COLUMN",
+    "family": "Edge",
+    "purpose": "Smooths a noisy column by a cubic smoothing spline, one row each.",
+    "parameters": [
+      {
+        "name": "x",
+        "description": "Stations, rising.",
+        "unit": "any",
+        "optional": false
+      },
+      {
+        "name": "v",
+        "description": "Values at the stations.",
+        "unit": "any",
+        "optional": false
+      },
+      {
+        "name": "noise",
+        "description": "Standard deviation of the noise of one value; omitted or \"found\": found by cross-validation; 0: nothing is smoothed.",
+        "unit": "unit of v",
+        "optional": true
+      }
+    ],
+    "gives": "Smoothed values, one entry a row.",
+    "resultUnit": "unit of v",
+    "limits": [
+      "At least 6 points where the noise is to be found, 3 where it is given. The noise is taken as equal and independent at all points.",
+      "Finding the noise needs enough points: with 15, about one noisy column in four is returned unsmoothed; with 50, none in a hundred (measured on smooth test columns). Give the noise where it is known."
+    ],
+    "sources": [
+      "C. H. Reinsch, Numer. Math. 10 (1967) 177–183 (spline).",
+      "P. Craven & G. Wahba, Numer. Math. 31 (1979) 377–403 (noise found: generalised cross-validation; noise given: least unbiased risk)."
+    ],
+    "examples": [
+      {
+        "formula": "=ROUND(INDEX(WALL.SMOOTH_COLUMN({0;1;2;3},{0;1;2;3},0.1),2,1),6)",
+        "value": 1
+      }
+    ],
+    "words": [
+      "spline",
+      "noise",
+      "scatter",
+      "filter"
+    ]
+  },
+  {
+    "name": "THWAITES_MARCH",
+    "family": "Laminar",
+    "purpose": "Marches a laminar layer along a wall by Thwaites' method: momentum loss, defect thickness, shape factor, wall friction and mass defect at each station, and the station where the layer separates.",
+    "parameters": [
+      {
+        "name": "x",
+        "description": "Stations along the wall, rising; 0 where the layer begins is not required.",
+        "unit": "length",
+        "optional": false
+      },
+      {
+        "name": "ue",
+        "description": "Edge speed at each station, above 0; the first may be 0 (stagnation point).",
+        "unit": "speed",
+        "optional": false
+      },
+      {
+        "name": "nu",
+        "description": "Kinematic viscosity.",
+        "unit": "length²/time",
+        "optional": false
+      },
+      {
+        "name": "options",
+        "description": "Two columns (label, value) or text: start momentum loss, edge fit (spline, monotone, smooth), noise, after separation (stop, continue), columns.",
+        "unit": "as their labels say",
+        "optional": true
+      },
+      {
+        "name": "radius",
+        "description": "Distance of the wall from the axis of a round body at each station; the first may be 0 (nose).",
+        "unit": "length",
+        "optional": true
+      }
+    ],
+    "gives": "A heading row, then a row a station; beyond separation the numbers are empty and state and note say where it lies.",
+    "resultUnit": "lengths, speeds and ratios in the units of x and ue",
+    "limits": [
+      "Steady laminar layer of constant density on a smooth solid wall, thin beside the wall's radii; gradient λ from −0.09 (separation) to 0.25, located inside a step and reported in state and note.",
+      "Error of the method itself against full solutions of four laminar layers (1 − x, 1 − x², sin x, Hiemenz's cylinder) up to nine tenths of the way to separation: behind a leading edge θ 1.3 %, H 2.2 %, δ* 1.7 %, δ3 1.5 %, cf 3.5 % half-way and up to 14 % at nine tenths, dm/dx 3 % half-way and up to 14 % at nine tenths; behind a stagnation point θ 6.4 % low and H 6.8 % high at the point itself, δ* 0.7 %, δ3 7.8 % low, cf 4.8 %, dm/dx 5 %. Separation station +2.8 % (1 − x), −1.3 % (the others). In the last tenth cf and H are poor.",
+      "Flat plate: θ 1.0 %, δ* 1.1 %, cf 0.9 % high against 0.664, 1.721 and 0.664 over √Rex; H 2.594 for 2.591.",
+      "15 stations find the method's own separation within 0.03 % and θ within 0.003 % on the classic decelerating flows (edge fit = spline); edge fit = monotone is good to 0.7 % and 0.25 %.",
+      "Beyond separation nothing is described; after separation = continue extends θ, Re θ and λ by the formula alone. δ3 comes from H by the relation of similar layers (own fit, 2 % near separation). No transition: the layer is taken as laminar throughout."
+    ],
+    "sources": [
+      "Thwaites, B., Aero. Quart. 1 (1949) 245–280 (method); N. Rott & L. F. Crabtree, J. Aero. Sci. 19 (1952) 553–565 (round bodies).",
+      "F. M. White, Viscous Fluid Flow (1991), section 4-6.6: S = (λ + 0.09)^0.62 and the polynomial H(λ), fits of Thwaites' table as revised by Curle & Skan (1957).",
+      "V. M. Falkner & S. W. Skan, Phil. Mag. 12 (1931) 865–896 (similar layers behind δ3)."
+    ],
+    "examples": [
+      {
+        "formula": "=ROUND(INDEX(WALL.THWAITES_MARCH({0;0.5;1},{2;2;2},0.00002),4,3),6)",
+        "value": 0.002121
+      },
+      {
+        "formula": "=ROUND(INDEX(WALL.THWAITES_MARCH({0;0.1;0.2},{0;1;2},0.00001,\"columns = gradient\"),2,1),6)",
+        "value": 0.075
+      }
+    ],
+    "words": [
+      "boundary",
+      "layer",
+      "momentum",
+      "thickness",
+      "displacement",
+      "thickness",
+      "separation",
+      "skin",
+      "friction",
+      "laminar"
+    ]
+  },
+  {
+    "name": "WALL_BLOW_VELOCITY",
+    "family": "Displacement",
+    "purpose": "Gives the blow velocity dm/dx: the wall-normal speed that an inviscid calculation must be given at the wall to feel the layer.",
+    "parameters": [
+      {
+        "name": "x",
+        "description": "Stations along the wall, rising.",
+        "unit": "length",
+        "optional": false
+      },
+      {
+        "name": "mass_defect",
+        "description": "Mass defect m = ue δ* at the stations.",
+        "unit": "speed·length",
+        "optional": false
+      },
+      {
+        "name": "noise",
+        "description": "Standard deviation of the noise of one m; omitted or \"found\": found by cross-validation; 0: the spline through all points.",
+        "unit": "speed·length",
+        "optional": true
+      },
+      {
+        "name": "radius",
+        "description": "Distance of the wall from the axis of a round body at the stations; the first may be 0 (nose).",
+        "unit": "length",
+        "optional": true
+      },
+      {
+        "name": "report",
+        "description": "TRUE: a table with headings (station, smoothed m, blow velocity, ± standard error, note); omitted: the blow velocity alone.",
+        "unit": "TRUE or FALSE",
+        "optional": true
+      }
+    ],
+    "gives": "Blow velocity, one entry a row, aligned with x; or the table.",
+    "resultUnit": "speed",
+    "limits": [
+      "dm/dx on a plane wall, (1/r) d(r m)/dx on a round body; on its axis m must be 0. At least 6 points where the noise is to be found, 3 where it is given, 2 for noise 0.",
+      "With 50 stations and 0.5 % noise on four laminar layers up to nine tenths of the way to separation, 95 % ranges (± 1.96 standard errors) covered the true dm/dx at over 90 % of the stations (measured). Clean columns integrate back to m within 0.04 %.",
+      "At a leading edge, where m rises like √x, no cubic follows: leave out the first two or three rows. Close to separation dm/dx runs away and needs close stations.",
+      "With some 15 noisy points cross-validation may find no noise and the points are then interpolated; the report says so. Give the noise where it is known."
+    ],
+    "sources": [
+      "M. J. Lighthill, J. Fluid Mech. 4 (1958) 383–392 (equivalent sources); mass conservation.",
+      "C. H. Reinsch, Numer. Math. 10 (1967) 177–183 (spline); P. Craven & G. Wahba, Numer. Math. 31 (1979) 377–403 (noise); G. Wahba, J. R. Statist. Soc. B 45 (1983) 133–150 (standard errors)."
+    ],
+    "examples": [
+      {
+        "formula": "=ROUND(INDEX(WALL.WALL_BLOW_VELOCITY({0;1;2;3;4},{0;1;4;9;16},0),3,1),9)",
+        "value": 4
+      },
+      {
+        "formula": "=ROUND(INDEX(WALL.WALL_BLOW_VELOCITY({0;1;2;3;4},{0;1;4;9;16},0,{0;1;2;3;4}),3,1),9)",
+        "value": 6
+      }
+    ],
+    "words": [
+      "transpiration",
+      "source",
+      "displacement",
+      "dm/dx",
+      "equivalent",
+      "blowing",
+      "mass",
+      "defect"
+    ]
+  },
+  {
     "name": "COLUMN_OF",
     "family": "Sheet",
     "purpose": "Picks one column out of a spilled table by its heading, so that a formula need not count columns.",

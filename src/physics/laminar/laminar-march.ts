@@ -39,5 +39,9 @@ export interface LaminarMarch {
   gradient: Float64Array;
   /** m = ue δ* [speed·length]. */
   massDefect: Float64Array;
+  /** dm∕dx, or (1∕r) d(r m)∕dx on a round body [speed], from the method's own equations; 0 where `blowBlank`. */
+  blowVelocity: Float64Array;
+  /** 1 where `blowVelocity` has no finite value (leading edge). */
+  blowBlank: Uint8Array;
   counts: { panels: number; searchedPanels: number; rootEvaluations: number };
 }

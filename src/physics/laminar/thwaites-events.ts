@@ -2,7 +2,7 @@ import { brentRoot } from "../../numerics/brent-root";
 import type { Outcome } from "../../numerics/outcome";
 import type { PiecewiseCubic } from "../../numerics/piecewise-cubic";
 import type { ThwaitesGrowth } from "./thwaites-growth";
-import { gradientAt, gradientRate } from "./thwaites-growth";
+import { GROWTH, gradientAt, gradientRate } from "./thwaites-growth";
 import { LARGEST_GRADIENT, SEPARATION_GRADIENT } from "./thwaites-relations";
 
 /** Parts into which a panel that might hold an event is cut; within a part λ is taken to turn at most once. */
@@ -88,7 +88,7 @@ function staysInRange(g: ThwaitesGrowth, i: number): boolean {
   const middle = (3 * (value[i + 1] - value[i])) / (x[i + 1] - x[i]) - s0 - s1;
   const steepestDown = Math.min(s0, middle, s1);
   const steepestUp = Math.max(s0, middle, s1);
-  const growth = (g.constant + 0.45 * g.running[i + 1]) / (r * r * u ** 6);
+  const growth = (g.constant + GROWTH * g.running[i + 1]) / (r * r * u ** 6);
   return steepestDown * growth > SEPARATION_GRADIENT && steepestUp * growth < LARGEST_GRADIENT;
 }
 

@@ -7,7 +7,7 @@ import type { PowerRule } from "../edge/power-integral";
 import { panelPowerIntegral, powerRule, runningPowerIntegral } from "../edge/power-integral";
 
 /** Thwaites' constants: ue dθ²∕dx = ν (0.45 − 6λ). Thwaites, Aero. Quart. 1 (1949) 245–280. */
-const GROWTH = 0.45;
+export const GROWTH = 0.45;
 const DAMPING = 6;
 /** The power of ue under the integral, one less than DAMPING. */
 const POWER = 5;
@@ -83,11 +83,13 @@ export function gradientAt(g: ThwaitesGrowth, i: number, t: number): number {
 /** dλ∕dx at the fraction t of panel i (t > 0 in the first panel), from the differential form of the method. */
 export function gradientRate(g: ThwaitesGrowth, i: number, t: number): number {
   const growth = growthAt(g, i, t);
-  const u = panelValue(g.curve, i, t);
-  const slope = panelSlope(g.curve, i, t);
-  let growthRate = (GROWTH - DAMPING * growth * slope) / u;
-  if (g.radius !== null) growthRate -= (2 * growth * panelSlope(g.radius, i, t)) / panelValue(g.radius, i, t);
-  return panelSecond(g.curve, i, t) * growth + slope * growthRate;
+  return panelSecond(g.curve, i, t) * growth + panelSlope(g.curve, i, t) * growthRate(g, i, t, growth);
+}
+
+/** d(θ² U∕ν)∕dx at the fraction t of panel i, where the growth is `growth`. */
+export function growthRate(g: ThwaitesGrowth, i: number, t: number, growth: number): number {
+  const rate = (GROWTH - DAMPING * growth * panelSlope(g.curve, i, t)) / panelValue(g.curve, i, t);
+  return g.radius === null ? rate : rate - (2 * growth * panelSlope(g.radius, i, t)) / panelValue(g.radius, i, t);
 }
 
 function largest(v: Float64Array): number {

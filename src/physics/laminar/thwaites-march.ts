@@ -7,6 +7,7 @@ import type { LaminarMarch } from "./laminar-march";
 import { LAYER_STATE } from "./laminar-march";
 import type { EventCounts } from "./thwaites-events";
 import { crossing, findEvent } from "./thwaites-events";
+import { thwaitesBlow } from "./thwaites-blow";
 import type { ThwaitesGrowth } from "./thwaites-growth";
 import { gradientAt, growthAt, thwaitesGrowth } from "./thwaites-growth";
 import { thwaitesShape, thwaitesShear } from "./thwaites-relations";
@@ -102,6 +103,9 @@ function fillStation(march: LaminarMarch, g: ThwaitesGrowth, nu: number, i: numb
   march.massDefect[i] = ue * shape * theta;
   if (ue > 0 && theta > 0) march.friction[i] = (2 * thwaitesShear(lambda)) / march.momentumReynolds[i];
   else march.frictionBlank[i] = 1;
+  const blow = thwaitesBlow(g, i, growth, theta);
+  if (Number.isFinite(blow)) march.blowVelocity[i] = blow;
+  else march.blowBlank[i] = 1;
   return Number.isFinite(theta) && Number.isFinite(lambda) && Number.isFinite(march.massDefect[i]) && Number.isFinite(march.friction[i]) && Number.isFinite(march.momentumReynolds[i]);
 }
 
@@ -113,6 +117,7 @@ function extendStation(march: LaminarMarch, g: ThwaitesGrowth, nu: number, i: nu
   march.gradient[i] = growth * g.curve.slope[i];
   march.momentumReynolds[i] = (march.edgeSpeed[i] * march.momentumLoss[i]) / nu;
   march.frictionBlank[i] = 1;
+  march.blowBlank[i] = 1;
   return Number.isFinite(march.momentumLoss[i]) && Number.isFinite(march.gradient[i]) && Number.isFinite(march.momentumReynolds[i]);
 }
 
@@ -142,6 +147,8 @@ function emptyMarch(edge: EdgeCurve, g: ThwaitesGrowth): LaminarMarch {
     momentumReynolds: column(),
     gradient: column(),
     massDefect: column(),
+    blowVelocity: column(),
+    blowBlank: new Uint8Array(n),
     counts: { panels: 0, searchedPanels: 0, rootEvaluations: 0 },
   };
 }

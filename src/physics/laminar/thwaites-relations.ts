@@ -27,3 +27,9 @@ export function thwaitesShape(lambda: number): number {
   const z = 0.25 - lambda;
   return 2 + z * (4.14 + z * (-83.5 + z * (854 + z * (-3337 + z * 4576))));
 }
+
+/** dH∕dλ of the same polynomial. */
+export function thwaitesShapeRate(lambda: number): number {
+  const z = 0.25 - lambda;
+  return -(4.14 + z * (-2 * 83.5 + z * (3 * 854 + z * (-4 * 3337 + z * 5 * 4576))));
+}

@@ -25,7 +25,7 @@ describe("how a march begins and ends", () => {
     expect(Math.abs(one.gradient[0])).toBeLessThan(1e-9);
     expect(Math.abs(one.gradient[1])).toBeLessThan(1e-9);
     // A slightly thinner layer passes the dip.
-    expect(marchOf(coarse, coarse.map(ue), 1, { startMomentumLoss: start - 0.005 }).stop.kind).toBe("end");
+    expect(marchOf(coarse, coarse.map(ue), 1, { startMomentumLoss: start - 0.005 }).reached).toBeGreaterThan(1);
   });
   it("has dλ∕dx equal to the difference quotient of λ, plane and round", () => {
     const x = spaced(12, 0.3, 1.5);
