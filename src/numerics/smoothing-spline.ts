@@ -13,8 +13,8 @@ export const LEAST_POINTS_TO_FIND_NOISE = 6;
 const WEAKEST = 1e-5;
 /** Narrowest panel, as a share of the mean one, that still stretches the search; beyond it rounding would be searched. */
 const NARROWEST = 1e-3;
-/** Strongest smoothing tried, × n⁴: a thousand times what flattens the slowest bend (first mode of a free beam, (n/4.73)⁴). */
-const STRONGEST = 2;
+/** Strongest smoothing tried, × n⁴: a million times what flattens the slowest bend (first mode of a free beam, (n/4.73)⁴). */
+const STRONGEST = 2000;
 /** Trials a decade of strength in the first pass; valleys of both criteria are wider than a decade. */
 const TRIALS_A_DECADE = 2;
 /** Points that must be left over (n − tr A) for the noise found to mean anything: a variance judged from less than one is none. */

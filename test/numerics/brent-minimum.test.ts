@@ -9,6 +9,11 @@ describe("Brent's minimum finder", () => {
       expect(found.evaluations).toBeLessThan(50);
     }
   });
+  it("needs few calls where the valley is smooth: superlinear, not golden section's 30 for six digits", () => {
+    const found = brentMinimum((x) => Math.exp(x) - 3 * x, 0, 4, 1e-6);
+    expect(found.ok && Math.abs(found.x - Math.log(3))).toBeLessThan(1e-6);
+    expect(found.ok && found.evaluations).toBeLessThan(14);
+  });
   it("says so when the function is not finite", () => {
     expect(brentMinimum(() => NaN, 0, 1, 1e-3)).toMatchObject({ ok: false, reason: "not finite" });
   });

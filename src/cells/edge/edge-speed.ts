@@ -21,7 +21,7 @@ import { spillColumn } from "../writing/spill-table";
  * @unit result speed
  * @limits cp from vacuum, −2/(1.4 M²), to stagnation, 1 without a Mach number and 1 + M²/4 + … with it; a value outside is refused with its row.
  * @limits No shock between the reference flow and the wall, and the same total pressure: not behind a shock, in a wake or in a separated region.
- * @source Ames Research Staff, NACA Report 1135 (1953), isentropic relations, equations 43, 44 and 50; Bernoulli's equation as their limit at small Mach number.
+ * @source Ames Research Staff, NACA Report 1135 (1953), relations of isentropic flow of a perfect gas; Bernoulli's equation as their limit at small Mach number.
  * @example =SUM(WALL.EDGE_SPEED({1;0.75;0;-3},10)) → 35
  * @example =INDEX(WALL.EDGE_SPEED({1;0;-1},100,0.5),3,1) → 143.8612
  * @words pressure velocity cp Bernoulli isentropic tap

@@ -22,7 +22,7 @@ const ROUNDING = 1e-12;
  * @param gamma ratio of specific heats [1], > 1
  * @returns edge speed at each place [speed]
  *
- * Source: Ames Research Staff, NACA Report 1135 (1953), equations 43–44 and 50 (isentropic pressure and speed); Bernoulli as its limit M → 0.
+ * Source: Ames Research Staff, NACA Report 1135 (1953), isentropic pressure (eq. 44) and speed (eq. 50, number from memory); Bernoulli as its limit M → 0.
  */
 export function edgeSpeed(
   cp: Float64Array,

@@ -177,6 +177,17 @@ describe("blow velocity on round bodies", () => {
     }
     expect(inside / 1800).toBeGreaterThan(0.9);
   });
+  it("states the error of a straight line's m′ + a m as any statistics text does", () => {
+    const x = spaced(12, 1, 2);
+    const radius = x.map((at) => at ** 3);
+    const got = blow(x, x.map((at) => 3 - at), { noise: 1, radius });
+    const xx = x.reduce((sum, at) => sum + (at - 1.5) ** 2, 0);
+    got.standardError.forEach((e, i) => {
+      const [a, d] = [3 / x[i], x[i] - 1.5];
+      // the strongest smoothing leaves a trace of curvature
+      expect(Math.abs(e ** 2 / ((1 + 2 * a * d + a * a * d * d) / xx + (a * a) / 12) - 1)).toBeLessThan(1e-4);
+    });
+  });
   it("refuses a mass defect on the axis and a radius that is none", () => {
     const x = spaced(8, 0, 1);
     expect(blowVelocity(x, x.map((at) => at + 1), { radius: x })).toMatchObject({ ok: false, reason: "outside range", argument: "mass_defect", row: 1 });
