@@ -33,7 +33,7 @@ export const catalogue: readonly CatalogueEntry[] = [
       "No shock between the reference flow and the wall, and the same total pressure: not behind a shock, in a wake or in a separated region."
     ],
     "sources": [
-      "Ames Research Staff, NACA Report 1135 (1953), isentropic relations, equations 43, 44 and 50; Bernoulli's equation as their limit at small Mach number."
+      "Ames Research Staff, NACA Report 1135 (1953), relations of isentropic flow of a perfect gas; Bernoulli's equation as their limit at small Mach number."
     ],
     "examples": [
       {
