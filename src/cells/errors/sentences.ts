@@ -65,12 +65,28 @@ const SENTENCES: Record<Reason, Sentence> = {
     need: (a) => `${a} not far below the profile's own speeds`,
     found: (v) => `has ${v("value")} where the profile reaches ${v("speed")}`,
   },
+  "ends inside layer": {
+    code: "#N/A",
+    need: () => "a traverse that reaches the layer's edge",
+    found: (v) => `ends at ${v("reached")} of the edge speed`,
+  },
+  "slips at wall": { code: "#VALUE!", need: () => "no speed at the wall, y = 0", found: (v) => `has ${v("value")}` },
+  "outside axis": {
+    code: "#VALUE!",
+    need: (a) => `${a} as a radius, above 0 for flow outside a round body, below 0 (and larger than the traverse) inside a round duct`,
+    found: (v) => `it has ${v("value")} with a traverse ${v("height")} high`,
+  },
   "profile undetermined": { code: "#N/A", need: () => "a profile that fixes the answer", found: () => "this one does not" },
   "fit undetermined": { code: "#N/A", need: () => "points that determine the fit", found: () => "these do not" },
   "noise undetermined": {
     code: "#N/A",
     need: () => "a column from which the noise can be told",
     found: () => "cross-validation finds no minimum; give the noise as a number",
+  },
+  "start shape alone": {
+    code: "#VALUE!",
+    need: () => "a start momentum loss beside the start shape",
+    found: () => "none is given",
   },
   "no similar layer": {
     code: "#N/A",

@@ -2,6 +2,13 @@
 import { edgeSpeed } from "../edge/edge-speed";
 import { gradientOf } from "../edge/gradient-of";
 import { smoothColumn } from "../edge/smooth-column";
+import { defectThickness } from "../traverse/defect-thickness";
+import { energyLoss } from "../traverse/energy-loss";
+import { layerHeight } from "../traverse/layer-height";
+import { massDefect } from "../traverse/mass-defect";
+import { momentumLoss } from "../traverse/momentum-loss";
+import { shapeFactor } from "../traverse/shape-factor";
+import { traverseTable } from "../traverse/traverse-table";
 import { thwaitesMarch } from "../laminar/thwaites-march";
 import { wallBlowVelocity } from "../displacement/wall-blow-velocity";
 import { columnOf } from "../sheet/column-of";
@@ -14,6 +21,13 @@ export const wallFunctions: Readonly<Record<string, (...args: any[]) => unknown>
   EDGE_SPEED: edgeSpeed,
   GRADIENT_OF: gradientOf,
   SMOOTH_COLUMN: smoothColumn,
+  DEFECT_THICKNESS: defectThickness,
+  ENERGY_LOSS: energyLoss,
+  LAYER_HEIGHT: layerHeight,
+  MASS_DEFECT: massDefect,
+  MOMENTUM_LOSS: momentumLoss,
+  SHAPE_FACTOR: shapeFactor,
+  TRAVERSE_TABLE: traverseTable,
   THWAITES_MARCH: thwaitesMarch,
   WALL_BLOW_VELOCITY: wallBlowVelocity,
   COLUMN_OF: columnOf,
