@@ -4,28 +4,28 @@ import { chartFigure } from "./chart-figure";
 
 /**
  * The book the bench opens on: an invented survey glider's wing section, upper side. The edge speeds are made up with the shape an
- * inviscid solution of such a section has (stagnation point, quick rise, long gentle rise, slow fall); they are nobody's data.
+ * inviscid solution of such a section has (stagnation point, quick rise, long gentle rise, slow fall to the station of a planned trip); they are nobody's data.
  */
 const SHEET = "Wing section";
 const STATIONS: readonly (readonly [x: number, ue: number])[] = [
   [0, 0],
-  [0.005, 6.42],
-  [0.01, 11.93],
-  [0.02, 19.36],
-  [0.035, 24.27],
-  [0.055, 26.35],
-  [0.08, 27.33],
-  [0.11, 28.1],
-  [0.145, 28.78],
-  [0.185, 29.29],
-  [0.225, 29.52],
-  [0.265, 29.47],
-  [0.305, 29.18],
-  [0.345, 28.7],
-  [0.385, 28.09],
+  [0.005, 8.81],
+  [0.01, 15.83],
+  [0.02, 23.18],
+  [0.035, 25.94],
+  [0.055, 26.62],
+  [0.08, 27.02],
+  [0.11, 27.41],
+  [0.145, 27.77],
+  [0.185, 28.04],
+  [0.225, 28.17],
+  [0.265, 28.16],
+  [0.305, 28.01],
+  [0.345, 27.71],
+  [0.385, 27.28],
 ];
 const VISCOSITY = 1.5e-5;
-const COLUMNS = "station, edge_speed, momentum_loss, defect, shape, friction, mass_defect, state";
+const COLUMNS = "station, edge_speed, momentum_loss, defect, shape, friction, mass_defect, state, note";
 
 /** Rows counted from 1, as in the sheet. */
 const HEADING_ROW = 18;
@@ -41,7 +41,7 @@ const STYLES = {
   6: { textColor: "#545d63", align: "right" },
   7: { bold: true, align: "right", wrapping: "wrap", verticalAlign: "bottom" },
 } as const;
-const FORMATS = { 1: "0.000", 2: "0.00", 3: "0.00e", 4: "0.000000", 5: "0.00000", 6: "0.0000" } as const;
+const FORMATS = { 1: "0.000", 2: "0.00", 3: "0.00e", 4: "0.00e", 5: "0.00e", 6: "0.0000" } as const;
 
 /** The starter book in the grid library's data form (version 19.3.2). */
 export function starterBook(): Record<string, unknown> {
@@ -57,17 +57,17 @@ export function starterBook(): Record<string, unknown> {
     B9: "spline",
     A10: "columns",
     B10: COLUMNS,
-    A12: "Change a shaded cell: the table and both charts follow.",
+    A12: "Input check",
+    A13: `=INDEX(WALL.INPUT_CHECK(A${FIRST}:A${LAST},B${FIRST}:B${LAST},B6),2,2)`,
+    A15: "Change a shaded cell: the table and both charts follow.",
     [`A${HEADING_ROW - 1}`]: "m",
     [`B${HEADING_ROW - 1}`]: "m/s",
     [`A${HEADING_ROW}`]: "station x",
     [`B${HEADING_ROW}`]: "edge speed ue",
     [`D${HEADING_ROW}`]: `=WALL.THWAITES_MARCH(A${FIRST}:A${LAST},B${FIRST}:B${LAST},B6,A9:B10)`,
-    [`M${HEADING_ROW - 1}`]: "m/s",
-    [`M${HEADING_ROW}`]: "blow velocity dm/dx",
-    [`M${FIRST}`]: `=WALL.WALL_BLOW_VELOCITY(A${FIRST}:A${LAST},WALL.COLUMN_OF(D${HEADING_ROW}#,"mass_defect"))`,
-    [`O${HEADING_ROW}`]: "shape factor H by COLUMN_OF",
-    [`O${FIRST}`]: `=WALL.COLUMN_OF(D${HEADING_ROW}#,"shape")`,
+    [`N${HEADING_ROW - 1}`]: "m/s",
+    [`N${HEADING_ROW}`]: "blow velocity dm/dx",
+    [`N${FIRST}`]: `=LET(m,WALL.COLUMN_OF(D${HEADING_ROW}#,"mass_defect"),reached,ISNUMBER(m),WALL.WALL_BLOW_VELOCITY(FILTER(A${FIRST}:A${LAST},reached),FILTER(m,reached),0))`,
   };
   ["m", "m/s", "m", "m", "1", "1", "m²/s"].forEach((unit, i) => (cells[`${"DEFGHIJ"[i]}${HEADING_ROW - 1}`] = unit));
   STATIONS.forEach(([x, ue], i) => {
@@ -81,10 +81,10 @@ export function starterBook(): Record<string, unknown> {
       {
         id: "wing",
         name: SHEET,
-        rowNumber: 100,
-        colNumber: 26,
+        rowNumber: 200,
+        colNumber: 40,
         cells,
-        cols: Object.fromEntries([[0, 190], [1, 100], [2, 20], ...[3, 4, 5, 6, 7, 8, 9, 10].map((c) => [c, 92]), [11, 20], [12, 100], [13, 20], [14, 110]].map(([c, size]) => [c, { size }])),
+        cols: Object.fromEntries([[0, 180], [1, 84], [2, 12], ...[3, 4, 5, 6, 7, 8, 9, 10].map((c) => [c, 98]), [11, 260], [12, 12], [13, 100]].map(([c, size]) => [c, { size }])),
         rows: { [HEADING_ROW - 1]: { size: 40 } },
         styles: {
           A1: 1,
@@ -95,16 +95,17 @@ export function starterBook(): Record<string, unknown> {
           B6: 5,
           B9: 5,
           B10: 5,
-          A12: 2,
-          [`A${HEADING_ROW - 1}:O${HEADING_ROW - 1}`]: 6,
-          [`A${HEADING_ROW}:O${HEADING_ROW}`]: 7,
+          A12: 4,
+          A15: 2,
+          [`A${HEADING_ROW - 1}:N${HEADING_ROW - 1}`]: 6,
+          [`A${HEADING_ROW}:N${HEADING_ROW}`]: 7,
           [`A${FIRST}:B${LAST}`]: 5,
         },
-        formats: { B6: 3, [rows("A")]: 1, [rows("B")]: 2, [rows("D")]: 1, [rows("E")]: 2, [`F${FIRST}:G${LAST}`]: 4, [rows("H")]: 1, [rows("I")]: 5, [rows("J")]: 5, [rows("M")]: 6, [rows("O")]: 1 },
+        formats: { B6: 3, [rows("A")]: 1, [rows("B")]: 2, [rows("D")]: 1, [rows("E")]: 2, [`F${FIRST}:G${LAST}`]: 4, [rows("H")]: 1, [rows("I")]: 5, [rows("J")]: 5, [rows("N")]: 6 },
         figures: [
           chartFigure(
             {
-              title: "Thicknesses",
+              title: "Momentum loss and defect thickness",
               x: block(rows("D")),
               xLabel: "station x [m]",
               series: [
@@ -115,12 +116,12 @@ export function starterBook(): Record<string, unknown> {
               at: block("D5"),
             },
             "thicknesses",
-            { width: 318, height: 262 },
+            { width: 294, height: 270 },
           ),
           chartFigure(
-            { title: "Blow velocity at the wall", x: block(rows("A")), xLabel: "station x [m]", series: [{ label: "blow velocity dm/dx", values: block(rows("M")) }], yLabel: "dm/dx [m/s]", at: block("G5") },
+            { title: "Blow velocity at the wall", x: block(rows("A")), xLabel: "station x [m]", series: [{ label: "blow velocity dm/dx", values: block(rows("N")) }], yLabel: "dm/dx [m/s]", at: block("G5") },
             "blow-velocity",
-            { width: 318, height: 262 },
+            { width: 294, height: 270 },
           ),
         ],
       },

@@ -1,6 +1,7 @@
 import type { CatalogueEntry } from "../cells/catalogue-entry";
 import { blockAddress, readAddress, type CellBlock } from "./cell-block";
 import { element } from "./element";
+import { errorWords } from "./error-words";
 import { exampleArguments, formFormula } from "./form-formula";
 import { isBlank, placeBeside, selectedColumns } from "./selected-columns";
 import type { HostCell, SheetHost } from "./sheet-host";
@@ -63,7 +64,7 @@ export function insertForm(entry: CatalogueEntry, host: SheetHost, say: (sentenc
     await host.writeFormula(target, formula);
     await host.goTo(target);
     const cell = (await host.read(target))[0]?.[0];
-    if (cell?.error) say(`${address} shows ${cell.error.code}. ${cell.error.sentence}`, true);
+    if (cell?.error) say(`${address} shows ${errorWords(cell.error)}`, true);
     else say(`${entry.name} stands in ${address}.`);
   }
 
@@ -77,7 +78,7 @@ export function insertForm(entry: CatalogueEntry, host: SheetHost, say: (sentenc
     return element(
       "div",
       { class: "wl-argument" },
-      element("label", { for: inputs[i]!.id }, element("span", { class: "wl-name" }, p.name), element("span", { class: "wl-unit" }, p.unit)),
+      element("label", { for: inputs[i]!.id }, element("span", { class: "wl-name" }, p.name), " ", element("span", { class: "wl-unit" }, `[${p.unit}]`)),
       element("div", { class: "wl-field" }, inputs[i]!, element("button", { type: "button", class: "wl-minor", "aria-label": `Use the selection for ${p.name}`, title: "Use the selected cells", click: attempt(() => takeSelection(i)) }, "Selection")),
       element("p", { id: `wl-about-${i}`, class: "wl-quiet" }, p.description),
     );

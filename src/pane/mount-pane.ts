@@ -50,7 +50,7 @@ export function mountPane(root: HTMLElement, host: SheetHost, catalogue: readonl
   body.append(list.root);
   root.classList.add("wl-pane");
   root.replaceChildren(
-    element("header", { class: "wl-header" }, element("h1", {}, "Wallsheet"), element("span", { class: "wl-quiet" }, `functions in ${host.name}`)),
+    element("div", { class: "wl-header" }, element("h1", {}, "Wallsheet"), element("span", { class: "wl-quiet" }, `functions in ${host.name}`)),
     cell.root,
     body,
     status,

@@ -1,6 +1,7 @@
 import type { CatalogueEntry } from "../cells/catalogue-entry";
 import { blockAddress } from "./cell-block";
 import { element } from "./element";
+import { errorWords } from "./error-words";
 import { calledFunctions } from "./form-formula";
 import type { HostCell, SheetHost } from "./sheet-host";
 
@@ -29,7 +30,7 @@ export function selectedCell(catalogue: readonly CatalogueEntry[], host: SheetHo
       const entries = names.flatMap((name) => catalogue.filter((entry) => entry.name === name));
       root.replaceChildren(
         element("p", { class: "wl-at" }, element("span", { class: "wl-name" }, address), ...stateOf(cell, source && origin?.formula ? blockAddress(source, at.sheet) : undefined)),
-        ...(cell?.error ? [element("p", { class: "wl-fault" }, sentenceOf(cell.error))] : []),
+        ...(cell?.error ? [element("p", { class: "wl-fault" }, errorWords(cell.error))] : []),
         ...entries.map((entry) => element("button", { type: "button", class: "wl-minor", click: () => open(entry) }, `About ${entry.name}`)),
       );
     },
@@ -37,11 +38,8 @@ export function selectedCell(catalogue: readonly CatalogueEntry[], host: SheetHo
 }
 
 function stateOf(cell: HostCell | undefined, source: string | undefined): (Node | string)[] {
+  if (cell?.error) return [];
   if (source !== undefined) return [element("span", {}, cell?.text === "" ? "blank" : (cell?.text ?? "")), element("span", { class: "wl-quiet" }, `spilled from ${source}`)];
   if (!cell || (cell.value === null && cell.formula === undefined)) return [element("span", { class: "wl-quiet" }, "empty")];
   return [element("span", {}, cell.text)];
-}
-
-function sentenceOf(error: { code: string; sentence: string }): string {
-  return error.sentence !== "" ? `${error.code}: ${error.sentence}` : `${error.code}. This host does not pass the reason on; WALL.INPUT_CHECK beside the cell says what is wrong with its inputs.`;
 }
