@@ -39,9 +39,10 @@ const STYLES = {
   4: { bold: true, wrapping: "wrap", verticalAlign: "bottom" },
   5: { fillColor: "#eaf3f5" },
   6: { textColor: "#545d63", align: "right" },
+  8: { bold: true, verticalAlign: "bottom" },
   7: { bold: true, align: "right", wrapping: "wrap", verticalAlign: "bottom" },
 } as const;
-const FORMATS = { 1: "0.000", 2: "0.00", 3: "0.00e", 4: "0.00e", 5: "0.00e", 6: "0.0000" } as const;
+const FORMATS = { 1: "0.000", 2: "0.00", 3: "0.00e", 4: "0.00e", 5: "0.00e", 6: "0.000" } as const;
 
 /** The starter book in the grid library's data form (version 19.3.2). */
 export function starterBook(): Record<string, unknown> {
@@ -49,6 +50,7 @@ export function starterBook(): Record<string, unknown> {
     A1: "Survey glider, wing section, upper side: laminar layer from the stagnation point",
     A2: "Invented scenario, invented numbers: no such aircraft. Edge speed shaped like an inviscid solution at 22 m/s, chord 0.60 m.",
     A3: CAUTIONS[0]!,
+    A4: "Change a shaded cell: the table and both charts follow.",
     A5: "Settings",
     A6: "kinematic viscosity ν [m²/s]",
     B6: String(VISCOSITY),
@@ -59,7 +61,6 @@ export function starterBook(): Record<string, unknown> {
     B10: COLUMNS,
     A12: "Input check",
     A13: `=INDEX(WALL.INPUT_CHECK(A${FIRST}:A${LAST},B${FIRST}:B${LAST},B6),2,2)`,
-    A15: "Change a shaded cell: the table and both charts follow.",
     [`A${HEADING_ROW - 1}`]: "m",
     [`B${HEADING_ROW - 1}`]: "m/s",
     [`A${HEADING_ROW}`]: "station x",
@@ -69,7 +70,7 @@ export function starterBook(): Record<string, unknown> {
     [`N${HEADING_ROW}`]: "blow velocity dm/dx",
     [`N${FIRST}`]: `=LET(m,WALL.COLUMN_OF(D${HEADING_ROW}#,"mass_defect"),reached,ISNUMBER(m),WALL.WALL_BLOW_VELOCITY(FILTER(A${FIRST}:A${LAST},reached),FILTER(m,reached),0))`,
   };
-  ["m", "m/s", "m", "m", "1", "1", "m²/s"].forEach((unit, i) => (cells[`${"DEFGHIJ"[i]}${HEADING_ROW - 1}`] = unit));
+  ["m", "m/s", "m", "m", "–", "–", "m²/s"].forEach((unit, i) => (cells[`${"DEFGHIJ"[i]}${HEADING_ROW - 1}`] = unit));
   STATIONS.forEach(([x, ue], i) => {
     cells[`A${FIRST + i}`] = String(x);
     cells[`B${FIRST + i}`] = String(ue);
@@ -90,15 +91,17 @@ export function starterBook(): Record<string, unknown> {
           A1: 1,
           A2: 2,
           A3: 3,
+          A4: 2,
           A5: 4,
           A8: 4,
           B6: 5,
           B9: 5,
           B10: 5,
           A12: 4,
-          A15: 2,
           [`A${HEADING_ROW - 1}:N${HEADING_ROW - 1}`]: 6,
-          [`A${HEADING_ROW}:N${HEADING_ROW}`]: 7,
+          [`A${HEADING_ROW}:J${HEADING_ROW}`]: 7,
+          [`K${HEADING_ROW}:L${HEADING_ROW}`]: 8,
+          [`N${HEADING_ROW}`]: 7,
           [`A${FIRST}:B${LAST}`]: 5,
         },
         formats: { B6: 3, [rows("A")]: 1, [rows("B")]: 2, [rows("D")]: 1, [rows("E")]: 2, [`F${FIRST}:G${LAST}`]: 4, [rows("H")]: 1, [rows("I")]: 5, [rows("J")]: 5, [rows("N")]: 6 },

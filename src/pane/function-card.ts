@@ -17,7 +17,7 @@ export function functionCard(entry: CatalogueEntry, host: SheetHost, back: () =>
   const root = element(
     "article",
     { class: "wl-card", "aria-label": entry.name },
-    element("button", { type: "button", class: "wl-back", click: back }, "← All functions"),
+    element("button", { type: "button", class: "wl-back", click: back }, "‹ All functions"),
     title,
     element("p", { class: "wl-quiet wl-family-of" }, entry.family),
     element("p", {}, entry.purpose),

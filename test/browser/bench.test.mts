@@ -59,8 +59,9 @@ test("the bench opens on the starter book in time: a filled spill, a blow veloci
   const [headings, ...rows] = await table();
   assert.deepEqual(headings, ["station x", "edge speed ue", "momentum loss θ", "defect thickness δ*", "shape factor H", "wall friction cf", "mass defect m"]);
   assert.equal(rows.length, 15);
-  // Thwaites at a stagnation point, θ² = 0.075 ν / (due/dx) (Thwaites 1949): from the cubic through the book's own first speeds.
-  assert.ok(Math.abs(Number(rows[0]![2]) - 2.44e-5) < 1e-6, `θ at the stagnation point is ${rows[0]![2]}`);
+  // Thwaites at a stagnation point: θ² = 0.075 ν / (due/dx) (Thwaites 1949); here with the first two speeds' slope, a little low.
+  const stagnation = Math.sqrt((0.075 * 1.5e-5) / (Number(rows[1]![1]) / Number(rows[1]![0])));
+  assert.ok(Math.abs(Number(rows[0]![2]) / stagnation - 1) < 0.05, `θ at the stagnation point is ${rows[0]![2]}, expected near ${stagnation}`);
   assert.ok((await blow()).every((value) => typeof value === "number" && value > 0));
   const charts = await chartLines(bench.page);
   assert.deepEqual(charts, { [THETA]: rows.map((row) => row[2]), [DEFECT]: rows.map((row) => row[3]), [BLOW_LINE]: await blow() });
@@ -121,7 +122,7 @@ test("text in the edge speed column shows the function's sentence in the grid's 
 
 test("the grid helps with a WALL function's arguments while it is typed", async () => {
   const { page } = bench;
-  await goToCell(page, 14, 3);
+  await goToCell(page, 0, 14);
   await page.keyboard.type("=WALL.THWAITES_MARCH(");
   const help = page.locator(".o-formula-assistant");
   await help.waitFor();

@@ -49,6 +49,11 @@ async function violations(): Promise<string[]> {
   });
 }
 
+test("text has a height with no font but the browser package's own", async () => {
+  const box = await pane().getByRole("heading", { name: "Wallsheet" }).boundingBox();
+  assert.ok(box !== null && box.height >= 16 && box.width >= 60, JSON.stringify(box));
+});
+
 test("searching by word, symbol and source narrows the list and says how many are left", async () => {
   const search = pane().getByRole("searchbox");
   const all = await pane().locator(".wl-entry").count();
@@ -76,7 +81,7 @@ test("a card states purpose, arguments with units, result, range, source and exa
 });
 
 test("the worked example is inserted by mouse at the selected cell, computes at once, and one undo takes it away", async () => {
-  await pane().getByRole("button", { name: "← All functions" }).click();
+  await pane().getByRole("button", { name: "‹ All functions" }).click();
   await select(FREE.col, FREE.row);
   await pane().getByRole("button", { name: /^THWAITES_MARCH/ }).click();
   await pane().getByText("Filled with a worked example").waitFor();
@@ -90,7 +95,7 @@ test("the worked example is inserted by mouse at the selected cell, computes at 
 });
 
 test("selected columns go into the first arguments; what is missing is asked for; filled cells are never overwritten", async () => {
-  await pane().getByRole("button", { name: "← All functions" }).click();
+  await pane().getByRole("button", { name: "‹ All functions" }).click();
   await select(0, 17, 1, 32);
   await pane().getByRole("button", { name: /^THWAITES_MARCH/ }).click();
   await pane().getByText("Filled from the selected columns").waitFor();
@@ -128,7 +133,7 @@ test("an inserted formula that cannot compute shows its sentence in words", asyn
 });
 
 test("everything works by keyboard alone: search, open, fill, insert, back", async () => {
-  await pane().getByRole("button", { name: "← All functions" }).click();
+  await pane().getByRole("button", { name: "‹ All functions" }).click();
   await select(FREE.col, FREE.row);
   await pane().getByRole("searchbox").focus();
   await page.keyboard.type("blow velocity");
@@ -181,7 +186,7 @@ test("Tab visits every control of a card in reading order, and the focus is alwa
   assert.equal(marks.size, expected - 1, [...marks].join(" | "));
   await pane().getByRole("article").locator("h2").focus();
   await page.keyboard.press("Shift+Tab");
-  assert.equal(await focusedName(), "← All functions");
+  assert.equal(await focusedName(), "‹ All functions");
 });
 
 test("the list has no accessibility violations either, light and dark", async () => {
@@ -201,7 +206,7 @@ test("the list has no accessibility violations either, light and dark", async ()
 test("at 320 px nothing is cut off or scrolls sideways", async () => {
   await page.setViewportSize({ width: 320, height: 1100 });
   for (const view of ["card", "list"]) {
-    if (view === "list") await pane().getByRole("button", { name: "← All functions" }).click();
+    if (view === "list") await pane().getByRole("button", { name: "‹ All functions" }).click();
     const wide = await page.evaluate(() =>
       [...document.querySelectorAll<HTMLElement>("#pane *")].filter((e) => e.getBoundingClientRect().right > innerWidth + 0.5 || e.scrollWidth > e.clientWidth + 1).filter((e) => e.clientWidth > 0 && !(e instanceof HTMLInputElement)).map((e) => `${e.tagName}.${e.className}`),
     );
