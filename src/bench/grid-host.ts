@@ -79,15 +79,13 @@ export function gridHost(model: GridModel): SheetHost {
     async wallCells() {
       const found: WallCell[] = [];
       for (const id of getters.getSheetIds()) {
-        for (let row = 0; row < getters.getNumberRows(id); row++) {
-          for (let col = 0; col < getters.getNumberCols(id); col++) {
-            const at = { sheetId: id, col, row };
-            const formula = formulaAt(at);
-            if (formula === undefined || calledFunctions(formula).length === 0) continue;
-            const own = { left: col, right: col, top: row, bottom: row };
-            const error = errorOf(getters.getEvaluatedCell(at));
-            found.push({ at: blockOf(id, own), formula, spill: blockOf(id, getters.getSpreadZone(at) ?? own), ...(error && { error }) });
-          }
+        const formulas = getters.getCells(id).filter((cell) => cell.isFormula).map((cell) => getters.getCellPosition(cell.id));
+        for (const at of formulas.sort((a, b) => a.row - b.row || a.col - b.col)) {
+          const formula = formulaAt(at)!;
+          if (calledFunctions(formula).length === 0) continue;
+          const own = { left: at.col, right: at.col, top: at.row, bottom: at.row };
+          const error = errorOf(getters.getEvaluatedCell(at));
+          found.push({ at: blockOf(id, own), formula, spill: blockOf(id, getters.getSpreadZone(at) ?? own), ...(error && { error }) });
         }
       }
       return found;

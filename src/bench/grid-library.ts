@@ -1,8 +1,8 @@
-import type { EngineGetters, EngineLibrary, EngineModel, EngineZone } from "../engine/types";
+import type { EngineCell, EngineGetters, EngineLibrary, EngineModel, EnginePosition, EngineZone } from "../engine/types";
 
 /** The parts of the grid library that only a page uses (@odoo/o-spreadsheet 19.3.7), typed by hand like those of the engine room. */
 export interface GridModel extends EngineModel {
-  getters: EngineGetters & { getSelectedZone(): EngineZone };
+  getters: EngineGetters & { getSelectedZone(): EngineZone; getCells(sheetId: string): EngineCell[]; getCellPosition(cellId: number): EnginePosition };
   on(type: "update", owner: object, listener: () => void): void;
   off(type: "update", owner: object): void;
   selection: {

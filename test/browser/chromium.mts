@@ -1,6 +1,6 @@
 // Starts a headless Chromium: $CHROMIUM where set, otherwise the one inside @sparticuz/chromium, which needs no browser, no system
 // library beyond glibc and no font of the machine's.
-import { existsSync, mkdirSync, readFileSync, writeFileSync } from "node:fs";
+import { existsSync, mkdirSync, readFileSync, rmSync, writeFileSync } from "node:fs";
 import os from "node:os";
 import path from "node:path";
 import { chromium, type Browser } from "playwright-core";
@@ -17,13 +17,18 @@ async function unpacked(): Promise<string> {
   const { version } = JSON.parse(readFileSync(new URL("../../node_modules/@sparticuz/chromium/package.json", import.meta.url), "utf8")) as { version: string };
   // The package unpacks into the temporary folder and takes whatever lies there: give each version its own.
   const home = path.join(os.tmpdir(), `wallsheet-chromium-${version}-${os.userInfo().uid}`);
+  const complete = path.join(home, "complete");
+  // An unpacking that was interrupted leaves half a browser, which the package would take for a whole one.
+  if (!existsSync(complete)) rmSync(home, { recursive: true, force: true });
   mkdirSync(home, { recursive: true, mode: 0o700 });
   process.env.TMPDIR = home;
   // Makes the package unpack its own NSS, NSPR and expat and put them on LD_LIBRARY_PATH.
   process.env.AWS_LAMBDA_JS_RUNTIME ??= "nodejs20.x";
   process.env.FONTCONFIG_FILE = fontsFile(home);
   const { default: packaged } = await import("@sparticuz/chromium");
-  return packaged.executablePath();
+  const executable = await packaged.executablePath();
+  writeFileSync(complete, "");
+  return executable;
 }
 
 /**
