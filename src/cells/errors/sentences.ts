@@ -32,7 +32,10 @@ const SENTENCES: Record<Reason, Sentence> = {
   negative: { code: "#VALUE!", need: (a) => `${a} of 0 or more`, found: (v) => `has ${v("value")}` },
   "outside range": {
     code: "#VALUE!",
-    need: (a, v) => `${a} between ${v("least")} and ${v("most")}`,
+    need: (a, v) => {
+      const [least, most] = [v("least"), v("most")];
+      return least === "-Infinity" ? `${a} of at most ${most}` : most === "Infinity" ? `${a} of at least ${least}` : `${a} between ${least} and ${most}`;
+    },
     found: (v) => `has ${v("value")}`,
   },
   "outside column": {

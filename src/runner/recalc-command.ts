@@ -1,0 +1,59 @@
+import { readFileSync } from "node:fs";
+import path from "node:path";
+import { parseArgs } from "node:util";
+import { WorkbookError } from "../workbook/workbook-error";
+import { refused, type CommandResult } from "./command-result";
+import { engineHere } from "./engine-here";
+import { recalculate } from "./recalculate";
+import { USAGE } from "./usage";
+import { writeWhole } from "./write-whole";
+
+/** `wallsheet recalc IN.xlsx -o OUT.xlsx` */
+export function recalcCommand(args: readonly string[]): CommandResult {
+  const { values, positionals } = parseArgs({
+    args: [...args],
+    allowPositionals: true,
+    options: { output: { type: "string", short: "o" }, "in-place": { type: "boolean" }, quiet: { type: "boolean", short: "q" }, help: { type: "boolean", short: "h" } },
+  });
+  if (values.help) return { status: 0, out: USAGE.recalc + "\n", complaints: [] };
+  const [input, ...more] = positionals;
+  if (input === undefined || more.length > 0) return refused("recalc needs one workbook; see wallsheet recalc --help");
+  const output = values["in-place"] ? input : values.output;
+  if (output === undefined) return refused("recalc needs -o OUT.xlsx or --in-place");
+  if (values["in-place"] && values.output !== undefined) return refused("recalc takes -o or --in-place, not both");
+  if (!values["in-place"] && path.resolve(output) === path.resolve(input)) return refused("recalc would write over its input; say --in-place if that is meant");
+  let bytes: Uint8Array;
+  try {
+    bytes = new Uint8Array(readFileSync(input));
+  } catch (error) {
+    return refused(`cannot read ${input}: ${systemWords(error)}`);
+  }
+  try {
+    const done = recalculate(engineHere(), bytes);
+    try {
+      writeWhole(output, done.bytes);
+    } catch (error) {
+      return refused(`cannot write ${output}: ${systemWords(error)}`);
+    }
+    const { formulas, wall, changed } = done.counts;
+    const summary = `${input}: ${formulas} formulas calculated, ${wall} with WALL functions; ${changed} cells changed`;
+    const lines = done.notes.map((n) => `${n.sheet}!${n.cell}: ${n.text}`);
+    return { status: done.notes.length > 0 ? 1 : 0, out: "", complaints: values.quiet ? [] : [...lines, summary] };
+  } catch (error) {
+    if (error instanceof WorkbookError) return refused(`${input}: ${error.message}`);
+    throw error;
+  }
+}
+
+/** What the operating system objects to, in words. */
+function systemWords(error: unknown): string {
+  const { code, message } = error as NodeJS.ErrnoException;
+  const words: Record<string, string> = {
+    ENOENT: "there is no such file or folder",
+    EACCES: "permission denied",
+    EISDIR: "it is a folder",
+    ENOSPC: "the disk is full",
+    EROFS: "the disk is read-only",
+  };
+  return words[code ?? ""] ?? message;
+}

@@ -1,0 +1,138 @@
+import { sheetValue, storedErrorCode } from "../engine/engine-values";
+import { SheetError } from "../engine/sheet-function";
+import type { Engine, EngineModel } from "../engine/types";
+import { boxName, cellBox, cellPlace, type CellBox } from "../workbook/cell-reference";
+import { cellsOf, patchSheet, type CellEdit } from "../workbook/patch-sheet";
+import type { StoredValue } from "../workbook/read-sheet";
+import { readWorkbook } from "../workbook/read-workbook";
+import { writePackage } from "../workbook/write-package";
+import { bookModel, modelOf, type ModelFormula, type ModelSheet } from "./book-model";
+
+/** One thing a recalculation has to say about a cell. */
+export interface RecalcNote {
+  sheet: string;
+  cell: string;
+  /** "error": the cell shows an error; "left": its stored value was kept. */
+  kind: "error" | "left";
+  text: string;
+}
+
+export interface Recalculated {
+  /** The new file; the very bytes that came in where no value changed. */
+  bytes: Uint8Array;
+  notes: RecalcNote[];
+  /** Formula cells calculated, WALL cells among them, cells whose stored value changed. */
+  counts: { formulas: number; wall: number; changed: number };
+}
+
+/** Two numbers nearer than this are one value: a workbook keeps 15 digits, and its own program may round the last one otherwise. */
+const SAME_NUMBER = 1e-13;
+
+/** Recalculates a workbook's formulas and puts the changed values into the original package; every other byte of its parts stays. */
+export function recalculate(engine: Engine, bytes: Uint8Array): Recalculated {
+  const book = readWorkbook(bytes);
+  const { model: first, sheets } = bookModel(engine, book);
+  const model = withoutOldSpills(engine, first, sheets);
+  const notes: RecalcNote[] = [];
+  const counts = { formulas: 0, wall: 0, changed: 0 };
+  const changed = new Map(book.package.parts);
+  let touched = false;
+  for (const part of sheets) {
+    const edits = editsOf(model, part, notes, counts);
+    const xml = patchSheet(part.sheet, edits);
+    if (xml === part.sheet.xml) continue;
+    touched = true;
+    changed.set(part.sheet.part, new TextEncoder().encode(xml));
+  }
+  return { bytes: touched ? writePackage({ ...book.package, parts: changed }) : bytes, notes, counts };
+}
+
+/** A formula stored without an array block shows one value; where the engine would spill it, it is asked for one. */
+function withoutOldSpills(engine: Engine, model: EngineModel, sheets: readonly ModelSheet[]): EngineModel {
+  const single = new Set<string>();
+  for (const { id, formulas } of sheets) {
+    for (const [reference, { cell, left }] of formulas) {
+      if (left !== undefined || cell.formula?.kind === "array") continue;
+      const zone = model.getters.getSpreadZone(positionOf(id, reference), { ignoreSpillError: true });
+      if (zone && (zone.right > zone.left || zone.bottom > zone.top)) single.add(`${id}!${reference}`);
+    }
+  }
+  return single.size === 0 ? model : modelOf(engine, sheets, single);
+}
+
+function editsOf(model: EngineModel, part: ModelSheet, notes: RecalcNote[], counts: Recalculated["counts"]): Map<string, CellEdit> {
+  const { sheet, id, formulas, spilled } = part;
+  const edits = new Map<string, CellEdit>();
+  const alive = new Set<string>();
+  const put = (reference: string, value: StoredValue, ref?: string) => {
+    const old = sheet.cells.get(reference);
+    if (old && near(old.value, value) && (ref === undefined || ref === old.formula?.ref)) return;
+    if (!old && value === null) return;
+    counts.changed++;
+    edits.set(reference, ref === undefined ? { value } : { value, ref });
+  };
+  for (const [reference, formula] of formulas) {
+    if (formula.left !== undefined) {
+      notes.push({ sheet: sheet.name, cell: reference, kind: "left", text: `left for Excel, its stored value kept: it uses ${formula.left}` });
+      continue;
+    }
+    counts.formulas++;
+    if (formula.callsWall) counts.wall++;
+    const shown = sheetValue(model.getters.getEvaluatedCell(positionOf(id, reference)));
+    const error = errorOf(model, id, reference);
+    if (error) notes.push({ sheet: sheet.name, cell: reference, kind: "error", text: error.message === "" ? error.code : `${error.code} ${error.message}` });
+    const value = error ? { error: storedErrorCode(error.code) } : (storedValue(shown) ?? 0); // a formula that refers to a blank cell shows 0
+    if (formula.cell.formula?.kind !== "array") {
+      put(reference, value);
+      continue;
+    }
+    const box = blockOf(model, id, reference, formula);
+    put(reference, value, boxName(box));
+    const zone = model.getters.getSpreadZone(positionOf(id, reference));
+    for (const name of cellsOf(box)) {
+      if (name === reference) continue;
+      alive.add(name);
+      const { row, column } = cellPlace(name);
+      const inside = zone && column - 1 <= zone.right && row - 1 <= zone.bottom;
+      // A fixed block larger than the result shows #N/A around it, as array formulas of the old kind do.
+      put(name, inside ? (valueAt(model, id, name) ?? 0) : { error: "#N/A" });
+    }
+  }
+  for (const name of spilled.keys()) if (!alive.has(name) && !edits.has(name)) put(name, null);
+  return edits;
+}
+
+/** The block an array formula covers: what it spills to now, or for one of the old, fixed kind the block it was given. */
+function blockOf(model: EngineModel, id: string, reference: string, formula: ModelFormula): CellBox {
+  const dynamic = formula.cell.attributes["cm"] !== undefined;
+  if (!dynamic) return cellBox(formula.cell.formula?.ref ?? reference);
+  const zone = model.getters.getSpreadZone(positionOf(id, reference));
+  return zone ? { left: zone.left + 1, right: zone.right + 1, top: zone.top + 1, bottom: zone.bottom + 1 } : cellBox(reference);
+}
+
+function valueAt(model: EngineModel, id: string, reference: string): StoredValue {
+  const error = errorOf(model, id, reference);
+  return error ? { error: storedErrorCode(error.code) } : storedValue(sheetValue(model.getters.getEvaluatedCell(positionOf(id, reference))));
+}
+
+function errorOf(model: EngineModel, id: string, reference: string): SheetError | undefined {
+  const cell = model.getters.getEvaluatedCell(positionOf(id, reference));
+  if (cell.type !== "error") return undefined;
+  const value = sheetValue({ value: cell.value, message: cell.message });
+  return value instanceof SheetError ? value : new SheetError("#VALUE!", String(cell.message ?? ""));
+}
+
+function storedValue(value: ReturnType<typeof sheetValue>): StoredValue {
+  return value instanceof SheetError ? { error: storedErrorCode(value.code) } : value;
+}
+
+function near(a: StoredValue, b: StoredValue): boolean {
+  if (typeof a === "number" && typeof b === "number") return Math.abs(a - b) <= SAME_NUMBER * Math.max(Math.abs(a), Math.abs(b));
+  if (a !== null && b !== null && typeof a === "object" && typeof b === "object") return a.error === b.error;
+  return a === b || (a === null && b === "") || (a === "" && b === null);
+}
+
+function positionOf(sheetId: string, reference: string): { sheetId: string; col: number; row: number } {
+  const { column, row } = cellPlace(reference);
+  return { sheetId, col: column - 1, row: row - 1 };
+}

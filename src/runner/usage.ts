@@ -1,0 +1,49 @@
+/** Texts of --help. */
+export const USAGE = {
+  main: `wallsheet: boundary-layer calculation in spreadsheet cells, on the command line
+
+usage: wallsheet COMMAND [ARGUMENTS] [--help]
+
+  recalc IN.xlsx -o OUT.xlsx   recalculate a workbook's WALL cells and what depends on them
+  eval FORMULA                 calculate one formula and print it
+  list [NAME]                  list the functions, or show one with its limits and sources
+
+  -h, --help       this text; after a command, that command's
+  -V, --version    the version
+
+exit status: 0 all well; 1 something could not be calculated; 2 wrong usage or unreadable file
+
+Results are preliminary-design estimates: check them against test or a higher-order method.`,
+  recalc: `wallsheet recalc IN.xlsx -o OUT.xlsx
+
+Recalculates the workbook and writes it with the new values. Only the values of formula cells change (and the blocks of spills that grow or
+shrink); styles, charts, names, comments and everything else stay byte for byte. Numbers that agree to 13 digits are left as they are.
+Cells that use a function unknown here keep their stored value and are reported. Error cells are reported with their sentence.
+
+  -o, --output FILE   where to write; the folder must exist
+      --in-place      write over IN.xlsx
+  -q, --quiet         report nothing but failures to read or write
+  -h, --help          this text
+
+The report goes to standard error, one line a cell. Exit status: 0; 1 if a cell shows an error or was left as it was; 2 if a file cannot be
+read or written. The output appears whole or not at all.`,
+  eval: `wallsheet eval FORMULA
+
+Calculates one formula and prints its value, or its table as tab-separated lines. Quote it for the shell:
+  wallsheet eval '=WALL.EDGE_SPEED(-0.5,20)'
+  wallsheet eval '=WALL.THWAITES_MARCH({0;0.5;1},{10;10;10},1.5E-5)'
+
+      --csv     print comma-separated values
+      --json    print JSON: a value, or an array of rows
+  -h, --help    this text
+
+Exit status: 0; 1 if the formula gives an error (its sentence goes to standard error); 2 on wrong usage.`,
+  list: `wallsheet list [NAME]
+
+Lists the functions with what each gives, or shows one function: arguments with units, result, valid range, sources, example.
+
+      --json    print the catalogue, or the one entry, as JSON
+  -h, --help    this text
+
+Exit status: 0; 2 if there is no such function.`,
+} as const;
