@@ -618,6 +618,354 @@ export const catalogue: readonly CatalogueEntry[] = [
     ]
   },
   {
+    "name": "ENERGY_MARCH",
+    "family": "Laminar",
+    "purpose": "Marches a laminar layer along a wall by its momentum and kinetic-energy equations, with suction or blowing through the wall: the same table as THWAITES_MARCH, nearer to the full equations.",
+    "parameters": [
+      {
+        "name": "x",
+        "description": "Stations along the wall, rising.",
+        "unit": "length",
+        "optional": false
+      },
+      {
+        "name": "ue",
+        "description": "Edge speed at each station, above 0; the first may be 0 (stagnation point).",
+        "unit": "speed",
+        "optional": false
+      },
+      {
+        "name": "nu",
+        "description": "Kinematic viscosity.",
+        "unit": "length²/time",
+        "optional": false
+      },
+      {
+        "name": "options",
+        "description": "Two columns (label, value) or text: start momentum loss, start shape, edge fit (spline, monotone, smooth), noise, after separation (stop, continue), columns.",
+        "unit": "as their labels say",
+        "optional": true
+      },
+      {
+        "name": "radius",
+        "description": "Distance of the wall from the axis of a round body at each station; the first may be 0 (nose).",
+        "unit": "length",
+        "optional": true
+      },
+      {
+        "name": "wall_velocity",
+        "description": "Speed of the fluid through the wall at each station: above 0 blowing, below 0 suction.",
+        "unit": "speed",
+        "optional": true
+      }
+    ],
+    "gives": "A heading row, then a row a station; beyond separation the numbers are empty and state and note say where it lies.",
+    "resultUnit": "lengths, speeds and ratios in the units of x and ue",
+    "limits": [
+      "Steady laminar layer of constant density on a smooth wall, thin beside the wall's radii; wall flow vw θ/ν from −1 (suction) to 0.6 (blowing), acceleration short of sink flow (H above 2.08 on a solid wall): the station where a limit is met is reported.",
+      "Error of the method itself against full solutions of four laminar layers (1 − x, 1 − x², sin x, Hiemenz's cylinder): θ within 0.5 % up to nine tenths of the way to separation and 1.1 % up to separation, δ* 2.5 %, cf 6 %; separation station −0.05 % to +1.2 %; sphere 105.7° for 104.8°.",
+      "Exact for similar layers: flat plate within 0.0001 %, stagnation points with suction or blowing 0.001 %; asymptotic suction layer H = 2 within 0.02 %, on the way there θ within 1 %.",
+      "15 stations change the separation station by less than 0.01 % (edge fit = spline).",
+      "Beyond separation a given edge speed does not determine the layer; after separation = continue carries θ on by the momentum equation with the shape held and no wall shear. No transition: the layer is taken as laminar throughout."
+    ],
+    "sources": [
+      "K. Wieghardt, Ing.-Arch. 16 (1948) 231–242, and I. Tani, J. Aero. Sci. 21 (1954) 487–495 (momentum and kinetic-energy equations; from memory).",
+      "Closure: Chebyshev fit to the similar layers of SIMILAR_LAYER with flow through the wall (own; Falkner & Skan 1930)."
+    ],
+    "examples": [
+      {
+        "formula": "=ROUND(INDEX(WALL.ENERGY_MARCH({0;0.5;1},{2;2;2},0.00002),4,3),6)",
+        "value": 0.0021
+      },
+      {
+        "formula": "=ROUND(INDEX(WALL.ENERGY_MARCH({0;1;2;3;4;5;6;7;8},{1;1;1;1;1;1;1;1;1},0.0001,\"columns = shape\",,{-1;-1;-1;-1;-1;-1;-1;-1;-1}),10,1),2)",
+        "value": 2
+      }
+    ],
+    "words": [
+      "boundary",
+      "layer",
+      "suction",
+      "blowing",
+      "transpiration",
+      "momentum",
+      "thickness",
+      "displacement",
+      "thickness",
+      "separation",
+      "skin",
+      "friction"
+    ]
+  },
+  {
+    "name": "FIELD_MARCH",
+    "family": "Laminar",
+    "purpose": "Marches a laminar layer along a wall by the full boundary-layer equations, with suction or blowing through the wall: the same table as THWAITES_MARCH, and the judge of the integral methods.",
+    "parameters": [
+      {
+        "name": "x",
+        "description": "Stations along the wall, rising.",
+        "unit": "length",
+        "optional": false
+      },
+      {
+        "name": "ue",
+        "description": "Edge speed at each station, above 0; the first may be 0 (stagnation point).",
+        "unit": "speed",
+        "optional": false
+      },
+      {
+        "name": "nu",
+        "description": "Kinematic viscosity.",
+        "unit": "length²/time",
+        "optional": false
+      },
+      {
+        "name": "options",
+        "description": "Two columns (label, value) or text: start momentum loss, start shape, edge fit (spline, monotone, smooth), noise, grid refinement (1 to 8), Richardson (no, yes), after separation (stop), columns.",
+        "unit": "as their labels say",
+        "optional": true
+      },
+      {
+        "name": "radius",
+        "description": "Distance of the wall from the axis of a round body at each station; the first may be 0 (nose).",
+        "unit": "length",
+        "optional": true
+      },
+      {
+        "name": "wall_velocity",
+        "description": "Speed of the fluid through the wall at each station: above 0 blowing, below 0 suction.",
+        "unit": "speed",
+        "optional": true
+      }
+    ],
+    "gives": "A heading row, then a row a station; beyond separation the numbers are empty and state and note say where it lies.",
+    "resultUnit": "lengths, speeds and ratios in the units of x and ue",
+    "limits": [
+      "Steady laminar layer of constant density on a smooth wall, thin beside the wall's radii; flow through the wall until blowing lifts the layer off, which is reported with its station.",
+      "Error of the numbers themselves at default settings on four laminar layers (1 − x, 1 − x², sin x, Hiemenz's cylinder; 50 to 200 stations): θ, δ*, δ3 and H within 0.04 % up to the last station before separation, cf 0.04 % up to 97 % of the way, separation station 0.01 %. Richardson = yes brings θ and δ* to 0.001 % and cf to 0.0005 %.",
+      "Flat plate within 0.0005 %; sphere 104.8°; uniform blowing of a flat plate lifts off at (vw/ue)² Rex = 0.745.",
+      "Few stations cost what the edge curve between them is wrong, not what the march is: steps are chosen by their own error. Separation comes from the square-root law of the wall shear; at a given edge speed the equations end there, and after separation = continue adds nothing.",
+      "No transition: the layer is taken as laminar throughout."
+    ],
+    "sources": [
+      "H. B. Keller & T. Cebeci, Lecture Notes in Physics 8 (1971) 92–100 (block elimination; ours is of fourth order across the layer and, with backward differences, of third along the wall).",
+      "S. Goldstein, Q. J. Mech. Appl. Math. 1 (1948) 43–69 (separation); W. Mangler, ZAMM 28 (1948) 97–103 (round bodies); L. F. Richardson, Phil. Trans. A 226 (1927) 299–361."
+    ],
+    "examples": [
+      {
+        "formula": "=ROUND(INDEX(WALL.FIELD_MARCH({0;0.5;1},{2;2;2},0.00002),4,3),6)",
+        "value": 0.0021
+      },
+      {
+        "formula": "=ROUND(INDEX(WALL.FIELD_MARCH({0;0.1;0.2},{0;1;2},0.00001,\"columns = shape\"),4,1),4)",
+        "value": 2.2162
+      }
+    ],
+    "words": [
+      "boundary",
+      "layer",
+      "Prandtl",
+      "equations",
+      "finite",
+      "difference",
+      "box",
+      "scheme",
+      "suction",
+      "blowing",
+      "transpiration",
+      "separation",
+      "skin",
+      "friction"
+    ]
+  },
+  {
+    "name": "FIELD_PROFILE",
+    "family": "Laminar",
+    "purpose": "Gives the speed profile across a laminar layer at one station of the wall, from the same full solution as FIELD_MARCH.",
+    "parameters": [
+      {
+        "name": "x",
+        "description": "Stations along the wall, rising.",
+        "unit": "length",
+        "optional": false
+      },
+      {
+        "name": "ue",
+        "description": "Edge speed at each station, above 0; the first may be 0 (stagnation point).",
+        "unit": "speed",
+        "optional": false
+      },
+      {
+        "name": "nu",
+        "description": "Kinematic viscosity.",
+        "unit": "length²/time",
+        "optional": false
+      },
+      {
+        "name": "station",
+        "description": "Where the profile is wanted: behind the first station, between stations too.",
+        "unit": "length",
+        "optional": false
+      },
+      {
+        "name": "options",
+        "description": "Two columns (label, value) or text: start momentum loss, start shape, edge fit (spline, monotone, smooth), noise, grid refinement (1 to 8), columns.",
+        "unit": "as their labels say",
+        "optional": true
+      },
+      {
+        "name": "radius",
+        "description": "Distance of the wall from the axis of a round body at each station; the first may be 0 (nose).",
+        "unit": "length",
+        "optional": true
+      },
+      {
+        "name": "wall_velocity",
+        "description": "Speed of the fluid through the wall at each station: above 0 blowing, below 0 suction.",
+        "unit": "speed",
+        "optional": true
+      }
+    ],
+    "gives": "A heading row, then height, speed, speed ratio and speed gradient from the wall into the free stream.",
+    "resultUnit": "lengths, speeds, their ratio, 1/time",
+    "limits": [
+      "As FIELD_MARCH; speeds on the flat plate within 0.00002 of ue. A station beyond separation is refused, naming where the layer ends."
+    ],
+    "sources": [
+      "As FIELD_MARCH: H. B. Keller & T. Cebeci, Lecture Notes in Physics 8 (1971) 92–100, at higher order."
+    ],
+    "examples": [
+      {
+        "formula": "=ROUND(INDEX(WALL.FIELD_PROFILE({0;0.5;1},{1;1;1},1,1),2,4),3)",
+        "value": 0.332
+      }
+    ],
+    "words": [
+      "velocity",
+      "profile",
+      "boundary",
+      "layer",
+      "similarity",
+      "Blasius"
+    ]
+  },
+  {
+    "name": "SIMILAR_LAYER",
+    "family": "Laminar",
+    "purpose": "Solves the similar (Falkner–Skan) laminar layer of an edge speed ue ∝ x^m: wall shear, thicknesses and shape factors, also with suction or blowing and with reversed flow.",
+    "parameters": [
+      {
+        "name": "m",
+        "description": "Exponent of the edge speed: 0 flat plate, 1 plane stagnation point, 1/3 round stagnation point (by Mangler's transformation), below 0 decelerating.",
+        "unit": "1",
+        "optional": false
+      },
+      {
+        "name": "what",
+        "description": "One quantity as a number: wall shear, friction, defect, momentum loss, energy loss, layer height, shape, energy shape, gradient, shear, dissipation, beta, wall value, wall flow, defect in eta, momentum loss in eta; omitted: all of them as a table.",
+        "unit": "word",
+        "optional": true
+      },
+      {
+        "name": "branch",
+        "description": "attached (default), or reversed: the second layer that a decelerating edge speed allows.",
+        "unit": "word",
+        "optional": true
+      },
+      {
+        "name": "wall_velocity",
+        "description": "Flow through the wall as (vw/ue)·√(ue x/ν): above 0 blowing, below 0 suction; omitted: a solid wall.",
+        "unit": "1",
+        "optional": true
+      }
+    ],
+    "gives": "A heading row, then quantity and value in a row each; a single value when `what` is given.",
+    "resultUnit": "1",
+    "limits": [
+      "m from −0.0904286 (separation) upwards on a solid wall, also far beyond 5; the reversed branch from there to −0.001. Suction lowers and blowing raises the least m; a flat plate is blown off at 0.619. Suction to −20. Outside: #N/A with the limit met.",
+      "Values good to 1e-9 on a solid wall; f″(0) near separation as √ of the distance to it, as sensitive as the layer itself."
+    ],
+    "sources": [
+      "V. M. Falkner & S. W. Skan, ARC R&M 1314 (1930); D. R. Hartree, Proc. Camb. Phil. Soc. 33 (1937) 223–239; reversed branch K. Stewartson, Proc. Camb. Phil. Soc. 50 (1954) 454–465.",
+      "Flow through the wall: H. W. Emmons & D. C. Leigh, ARC CP 157 (1954)."
+    ],
+    "examples": [
+      {
+        "formula": "=ROUND(WALL.SIMILAR_LAYER(0,\"wall shear\"),6)",
+        "value": 0.4696
+      },
+      {
+        "formula": "=ROUND(WALL.SIMILAR_LAYER(1,\"shape\"),5)",
+        "value": 2.21623
+      }
+    ],
+    "words": [
+      "Falkner",
+      "Skan",
+      "Hartree",
+      "Blasius",
+      "Hiemenz",
+      "wedge",
+      "flow",
+      "similarity",
+      "transpiration"
+    ]
+  },
+  {
+    "name": "SIMILAR_PROFILE",
+    "family": "Laminar",
+    "purpose": "Gives the speed profile of the similar (Falkner–Skan) laminar layer of an edge speed ue ∝ x^m.",
+    "parameters": [
+      {
+        "name": "m",
+        "description": "Exponent of the edge speed: 0 flat plate, 1 plane stagnation point, below 0 decelerating.",
+        "unit": "1",
+        "optional": false
+      },
+      {
+        "name": "eta",
+        "description": "Heights η = y·√(ue/(ν x)) where the profile is wanted; omitted: 41 even ones from the wall into the free stream.",
+        "unit": "1",
+        "optional": true
+      },
+      {
+        "name": "branch",
+        "description": "attached (default) or reversed.",
+        "unit": "word",
+        "optional": true
+      },
+      {
+        "name": "wall_velocity",
+        "description": "Flow through the wall as (vw/ue)·√(ue x/ν): above 0 blowing, below 0 suction; omitted: a solid wall.",
+        "unit": "1",
+        "optional": true
+      }
+    ],
+    "gives": "A heading row, then height, speed over edge speed, and its gradient by η, a row a height.",
+    "resultUnit": "1",
+    "limits": [
+      "As SIMILAR_LAYER; values good to 1e-9 on a solid wall. Heights of 0 or more, in any order."
+    ],
+    "sources": [
+      "V. M. Falkner & S. W. Skan, ARC R&M 1314 (1930); D. R. Hartree, Proc. Camb. Phil. Soc. 33 (1937) 223–239."
+    ],
+    "examples": [
+      {
+        "formula": "=ROUND(INDEX(WALL.SIMILAR_PROFILE(0,2),2,2),6)",
+        "value": 0.629766
+      }
+    ],
+    "words": [
+      "Blasius",
+      "velocity",
+      "profile",
+      "Falkner",
+      "Skan",
+      "wedge"
+    ]
+  },
+  {
     "name": "THWAITES_MARCH",
     "family": "Laminar",
     "purpose": "Marches a laminar layer along a wall by Thwaites' method: momentum loss, defect thickness, shape factor, wall friction and mass defect at each station, and the station where the layer separates.",

@@ -9,6 +9,11 @@ import { massDefect } from "../traverse/mass-defect";
 import { momentumLoss } from "../traverse/momentum-loss";
 import { shapeFactor } from "../traverse/shape-factor";
 import { traverseTable } from "../traverse/traverse-table";
+import { energyMarch } from "../laminar/energy-march";
+import { fieldMarch } from "../laminar/field-march";
+import { fieldProfile } from "../laminar/field-profile";
+import { similarLayer } from "../laminar/similar-layer";
+import { similarProfile } from "../laminar/similar-profile";
 import { thwaitesMarch } from "../laminar/thwaites-march";
 import { wallBlowVelocity } from "../displacement/wall-blow-velocity";
 import { columnOf } from "../sheet/column-of";
@@ -28,6 +33,11 @@ export const wallFunctions: Readonly<Record<string, (...args: any[]) => unknown>
   MOMENTUM_LOSS: momentumLoss,
   SHAPE_FACTOR: shapeFactor,
   TRAVERSE_TABLE: traverseTable,
+  ENERGY_MARCH: energyMarch,
+  FIELD_MARCH: fieldMarch,
+  FIELD_PROFILE: fieldProfile,
+  SIMILAR_LAYER: similarLayer,
+  SIMILAR_PROFILE: similarProfile,
   THWAITES_MARCH: thwaitesMarch,
   WALL_BLOW_VELOCITY: wallBlowVelocity,
   COLUMN_OF: columnOf,

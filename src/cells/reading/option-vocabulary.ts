@@ -24,6 +24,9 @@ export const OPTION_VOCABULARY = {
   "edge fit": { kind: "choice", choices: ["spline", "monotone", "smooth"] },
   noise: { kind: "number or choice", choices: ["found"] },
   "after separation": { kind: "choice", choices: ["stop", "continue"] },
+  // A field march has a grid where the integral methods have none: how fine, and whether to extrapolate from two of them.
+  "grid refinement": { kind: "number", positive: true },
+  Richardson: { kind: "choice", choices: ["no", "yes"] },
   "near wall": { kind: "choice", choices: ["fitted", "no-slip", "none"] },
   columns: { kind: "columns" },
 } as const satisfies Record<string, OptionKind>;

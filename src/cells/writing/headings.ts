@@ -29,6 +29,12 @@ export const HEADINGS = [
   { key: "heat", heading: "Stanton number St", symbol: "St" },
   { key: "value", heading: "value", symbol: "v" },
   { key: "uncertainty", heading: "± standard error", symbol: "±" },
+  { key: "height", heading: "height y", symbol: "y" },
+  { key: "speed", heading: "speed u", symbol: "u" },
+  { key: "speed_ratio", heading: "speed ratio u/ue", symbol: "u/ue" },
+  { key: "speed_slope", heading: "speed gradient ∂u/∂y", symbol: "∂u/∂y" },
+  { key: "similar_height", heading: "similar height η", symbol: "η" },
+  { key: "similar_shear", heading: "similar shear", symbol: "∂(u/ue)/∂η" },
   { key: "state", heading: "state", symbol: "state" },
   { key: "note", heading: "note", symbol: "note" },
 ] as const satisfies readonly Heading[];
