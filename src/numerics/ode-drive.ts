@@ -52,7 +52,7 @@ export function odeDrive(right: OdeRight, x: number, y: Float64Array, settings: 
       const size = solved ? errorSize() : Infinity;
       if (!(size <= 1)) {
         counts.rejected += 1;
-        wanted = h * (size < Infinity ? Math.max(SHRINK_MOST, SAFETY * size ** -0.2) : 0.25);
+        wanted = h * (size < Infinity ? Math.max(SHRINK_MOST, SAFETY * size ** -0.25) : 0.25);
         if (wanted < settings.leastStep) return "stuck";
         continue;
       }
@@ -63,9 +63,9 @@ export function odeDrive(right: OdeRight, x: number, y: Float64Array, settings: 
       counts.steps += 1;
       counts.largestError = Math.max(counts.largestError, size * settings.relative);
       state.set(next);
-      slope.set(work.stage[6]);
       drive.x = h === left ? end : drive.x + h;
-      const grown = h * Math.min(GROW_MOST, size > 0 ? SAFETY * size ** -0.2 : GROW_MOST);
+      if (!right(drive.x, state, slope)) return "stuck";
+      const grown = h * Math.min(GROW_MOST, size > 0 ? SAFETY * size ** -0.25 : GROW_MOST);
       // A step cut short by its end says nothing against the longer one wanted.
       wanted = h < wanted ? Math.max(grown, wanted) : grown;
     }
