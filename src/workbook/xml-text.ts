@@ -21,7 +21,6 @@ export function xmlText(text: string): string {
   return text
     .replace(/_(?=x[0-9A-F]{4}_)/gi, "_x005F_")
     .replace(/[&<>]/g, (c) => (c === "&" ? "&amp;" : c === "<" ? "&lt;" : "&gt;"))
-    // eslint-disable-next-line no-control-regex -- these are the characters XML cannot hold
     .replace(/[\u0000-\u0008\u000b\u000c\u000e-\u001f\ufffe\uffff]/g, (c) => `_x${c.charCodeAt(0).toString(16).padStart(4, "0").toUpperCase()}_`);
 }
 

@@ -14,7 +14,7 @@ describe("EDGE_SPEED", () => {
     expect(edgeSpeed(0 as never, 10, null, none)).toEqual([[10]]);
   });
   test.each<[unknown[][], unknown, unknown, string]>([
-    [column(0.2, 1.01), 10, null, "EDGE_SPEED needs cp between "],
+    [column(0.2, 1.01), 10, null, "EDGE_SPEED needs cp of at most 1; row 2 has 1.01"],
     [column(0.2, 1.01), 10, null, "row 2 has 1.01"],
     [column(-2.5), 10, 0.8, "EDGE_SPEED needs cp between -2.23214 and 1.17"],
     [column(0.2, "x"), 10, null, 'EDGE_SPEED needs numbers in cp; row 2 holds the text "x"'],
