@@ -11,13 +11,13 @@ const SHEET_FUTURE = new Set(["FILTER", "SORT"]);
 /** A plain formula (`=LET(a,1,a+WALL.X(D5#))`) as a file stores it, without "=": prefixed functions, parameters, add-in calls and spills. */
 export function storedSpelling(formula: string, functionNames: readonly string[]): string {
   const own = new Map(functionNames.map((n) => [n.toUpperCase(), `_xldudf_${n.replace(/\./g, "_")}`]));
-  const tokens = tokenize(formula, { withLocation: false }).map((t) => ({ ...t }));
+  const tokens = singles(tokenize(formula, { withLocation: false }));
   const parameters = parameterNames(tokens);
   const out: string[] = [];
   tokens.forEach((token, i) => {
     const upper = token.value.toUpperCase();
     if (token.type === tokenTypes.FX_PREFIX) return;
-    if (token.type === tokenTypes.OPERATOR && token.value === "#" && i > 0) {
+    if (isOperator(token, "#") && i > 0) {
       out.push(`_xlfn.ANCHORARRAY(${out.pop()!})`);
     } else if (token.type === tokenTypes.REF_NAMED && parameters.has(upper)) out.push("_xlpm." + token.value);
     else if (token.type === tokenTypes.FUNCTION) {
@@ -30,20 +30,45 @@ export function storedSpelling(formula: string, functionNames: readonly string[]
 
 /** A stored formula as a sheet shows it: the inverse of `storedSpelling`. */
 export function shownSpelling(stored: string, functionNames: readonly string[]): string {
-  const own = new Map(functionNames.map((n) => [`_XLDUDF_${n.replace(/\./g, "_").toUpperCase()}`, n]));
+  const own = new Map(functionNames.flatMap((n) => [`_xldudf_${n.replace(/\./g, "_")}`, n].map((spelling) => [spelling.toUpperCase(), n] as const)));
   const tokens = tokenize("=" + stored, { withLocation: false }).map((t) => ({ ...t }));
   for (let i = 0; i < tokens.length; i++) {
     const token = tokens[i]!;
-    if (token.type === tokenTypes.FUNCTION && /^_xlfn\.ANCHORARRAY$/i.test(token.value)) {
-      const close = closing(tokens, i + 1);
-      if (close > 0) tokens.splice(i, close - i + 1, ...tokens.slice(i + 2, close), { type: tokenTypes.OPERATOR, value: "#" } as Token);
+    if (token.type !== tokenTypes.FUNCTION && token.type !== tokenTypes.REF_NAMED) continue;
+    const marked = /^_xlfn\.(ANCHORARRAY|SINGLE)$/i.exec(token.value)?.[1]?.toUpperCase();
+    const close = marked === undefined ? -1 : closing(tokens, i + 1);
+    if (close > 0) {
+      const inside = tokens.slice(i + 2, close);
+      tokens.splice(i, close - i + 1, ...(marked === "SINGLE" ? [operator("@"), ...inside] : [...inside, operator("#")]));
       continue;
     }
-    if (token.type !== tokenTypes.FUNCTION && token.type !== tokenTypes.REF_NAMED) continue;
     const bare = token.value.replace(/^(?:_xlfn\.|_xlws\.|_xlpm\.)+/i, "");
     token.value = own.get(bare.toUpperCase()) ?? bare;
   }
   return tokens.map((t) => t.value).join("");
+}
+
+/** `@x` → `SINGLE(x)`, the innermost first; what follows the sign is a reference, a name, a call or a bracketed expression. */
+function singles(written: readonly Token[]): Token[] {
+  const tokens = written.map((t) => ({ ...t }));
+  for (let i = tokens.length - 1; i >= 0; i--) {
+    if (!isOperator(tokens[i]!, "@")) continue;
+    let end = i + 1;
+    if (tokens[end]?.type === tokenTypes.FUNCTION) end = closing(tokens, end + 1);
+    else if (tokens[end]?.value === "(") end = closing(tokens, end);
+    if (end < 0 || end >= tokens.length) continue;
+    if (tokens[end + 1] && isOperator(tokens[end + 1]!, "#")) end++;
+    tokens.splice(i, end - i + 1, { type: tokenTypes.FUNCTION, value: "SINGLE" }, operator("("), ...tokens.slice(i + 1, end + 1), operator(")"));
+  }
+  return tokens;
+}
+
+function operator(value: string): Token {
+  return { type: tokenTypes.OPERATOR, value };
+}
+
+function isOperator(token: Token, value: string): boolean {
+  return token.type === tokenTypes.OPERATOR && token.value === value;
 }
 
 /** Names that LET and LAMBDA give in this formula, upper case. */

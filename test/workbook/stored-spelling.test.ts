@@ -19,6 +19,8 @@ const PAIRS: readonly [string, string][] = [
   ["=\"say \"\"WALL.EDGE_SPEED(\"\"\"&A1", "\"say \"\"WALL.EDGE_SPEED(\"\"\"&A1"],
   ["=SUM(Runs[speed ue])+Runs[[#Totals],[run]]", "SUM(Runs[speed ue])+Runs[[#Totals],[run]]"],
   ["=@A1:A9", "_xlfn.SINGLE(A1:A9)"],
+  ["=@D5#+@nu*@SUM(@B:B)", "_xlfn.SINGLE(_xlfn.ANCHORARRAY(D5))+_xlfn.SINGLE(nu)*_xlfn.SINGLE(SUM(_xlfn.SINGLE(B:B)))"],
+  ["=SUM(Runs[@speed])", "SUM(Runs[@speed])"],
   ["=STDEV.S(A1:A9)", "_xlfn.STDEV.S(A1:A9)"],
   ["=LOG10(A1)", "LOG10(A1)"],
 ];
@@ -41,6 +43,7 @@ describe("stored spelling", () => {
       leaf,
       fc.tuple(tie("formula"), fc.constantFrom("+", "-", "*", "/", "^", "&", "=", "<>", ">="), tie("formula")).map((p) => p.join("")),
       tie("formula").map((a) => `-(${a})`),
+      tie("formula").map((a) => `@(${a})`),
       fc.tuple(fc.constantFrom("SUM", "XLOOKUP", "SORT", "IFNA", "STDEV.S", "TEXTJOIN", ...NAMES), fc.array(tie("formula"), { maxLength: 3 })).map(([name, args]) => `${name}(${args.join(", ")})`),
       fc.tuple(tie("formula"), tie("formula")).map(([a, b]) => `LET(u,${a},w_2,${b}+u,u*w_2)`),
       fc.tuple(tie("formula"), tie("formula")).map(([a, b]) => `MAP(${a},LAMBDA(p,q,p+q+${b}))`),
