@@ -4,6 +4,7 @@ import { cellsOf } from "../workbook/patch-sheet";
 import { formulaReader, sharedFormulaAt } from "../workbook/plain-formula";
 import type { StoredCell, StoredValue } from "../workbook/read-sheet";
 import type { BookSheet, Workbook } from "../workbook/read-workbook";
+import { callsWall, leftJudge, type Left } from "./why-left";
 
 /** A formula cell as it goes into the engine. */
 export interface ModelFormula {
@@ -11,7 +12,7 @@ export interface ModelFormula {
   /** Plain text of the formula, with its "=". */
   text: string;
   /** Why it is not calculated here; its stored value stands in for it. */
-  left?: string;
+  left?: Left;
   callsWall: boolean;
 }
 
@@ -39,10 +40,7 @@ const TEXT_FORMAT = 1;
 export function bookModel(engine: Engine, book: Workbook): BookModel {
   const alias = sheetAliases(book.sheets.map((s) => s.name));
   const read = formulaReader(book, alias);
-  const known = new Set([...Object.keys(engine.library.registries.functionRegistry.content), "LET", "LAMBDA", "LOG10", "ANCHORARRAY", "SINGLE"].map((n) => n.toUpperCase()));
-  const stored = new Map(engine.functionNames.map((n) => [`_XLDUDF_${n.replace(/\./g, "_")}`.toUpperCase(), n]));
-  const functionKnown = (name: string) => known.has(name) || stored.has(name);
-  const isWall = (name: string) => /^(?:_XLDUDF_)?WALL[._]/.test(name);
+  const whyLeft = leftJudge(engine, book.from1904);
 
   const sheets = book.sheets.map((sheet): ModelSheet => {
     const formulas = new Map<string, ModelFormula>();
@@ -54,10 +52,8 @@ export function bookModel(engine: Engine, book: Workbook): BookModel {
       const text = formulaText(cell, shared);
       if (text === undefined) continue;
       const plain = read(text, sheet.name, cellPlace(cell.reference));
-      const unknown = plain.functions.find((f) => !functionKnown(f));
-      const callsWall = plain.functions.some(isWall);
-      const left = cell.formula.kind === "dataTable" ? "a what-if table" : plain.outside ? "a link to another book" : unknown !== undefined ? `the function ${unknown}` : undefined;
-      formulas.set(cell.reference, { cell, text: plain.text, callsWall, ...(left === undefined ? {} : { left }) });
+      const left = whyLeft(cell, plain);
+      formulas.set(cell.reference, { cell, text: plain.text, callsWall: callsWall(plain), ...(left === undefined ? {} : { left }) });
     }
     for (const { cell, left } of formulas.values()) {
       if (cell.formula?.kind !== "array" || cell.formula.ref === undefined || left !== undefined) continue;
@@ -91,7 +87,7 @@ export function modelOf(engine: Engine, sheets: readonly ModelSheet[], single: R
           const content = constantText(cell.value);
           if (content === undefined) continue;
           cells[reference] = content;
-          if (typeof cell.value === "string") formats[reference] = TEXT_FORMAT;
+          if (typeof cell.value === "string" && content === cell.value) formats[reference] = TEXT_FORMAT;
         }
       }
       return { id, name: id, rowNumber: 2 * rows + SPARE_ROWS, colNumber: columns + SPARE_COLUMNS, cells, formats };
@@ -111,6 +107,8 @@ function constantText(value: StoredValue): string | undefined {
   if (value === null || value === "") return undefined;
   if (typeof value === "object") return "=" + value.error;
   if (typeof value === "boolean") return value ? "TRUE" : "FALSE";
+  // The engine takes text that begins like a formula for one, whatever its format.
+  if (typeof value === "string" && value.startsWith("=")) return `="${value.replace(/"/g, '""')}"`;
   return String(value);
 }
 

@@ -1,4 +1,4 @@
-import { readFileSync } from "node:fs";
+import { readFileSync, statSync } from "node:fs";
 import path from "node:path";
 import { parseArgs } from "node:util";
 import { WorkbookError } from "../workbook/workbook-error";
@@ -21,7 +21,7 @@ export function recalcCommand(args: readonly string[]): CommandResult {
   const output = values["in-place"] ? input : values.output;
   if (output === undefined) return refused("recalc needs -o OUT.xlsx or --in-place");
   if (values["in-place"] && values.output !== undefined) return refused("recalc takes -o or --in-place, not both");
-  if (!values["in-place"] && path.resolve(output) === path.resolve(input)) return refused("recalc would write over its input; say --in-place if that is meant");
+  if (!values["in-place"] && isSameFile(input, output)) return refused("recalc would write over its input; say --in-place if that is meant");
   let bytes: Uint8Array;
   try {
     bytes = new Uint8Array(readFileSync(input));
@@ -38,11 +38,18 @@ export function recalcCommand(args: readonly string[]): CommandResult {
     const { formulas, wall, changed } = done.counts;
     const summary = `${input}: ${formulas} formulas calculated, ${wall} with WALL functions; ${changed} cells changed`;
     const lines = done.notes.map((n) => `${n.sheet}!${n.cell}: ${n.text}`);
-    return { status: done.notes.length > 0 ? 1 : 0, out: "", complaints: values.quiet ? [] : [...lines, summary] };
+    return { status: done.notes.some((n) => n.kind !== "kept") ? 1 : 0, out: "", complaints: values.quiet ? [] : [...lines, summary] };
   } catch (error) {
     if (error instanceof WorkbookError) return refused(`${input}: ${error.message}`);
     throw error;
   }
+}
+
+/** One file under two names too: links and other spellings of the path. */
+function isSameFile(one: string, other: string): boolean {
+  if (path.resolve(one) === path.resolve(other)) return true;
+  const [a, b] = [one, other].map((file) => statSync(file, { throwIfNoEntry: false }));
+  return a !== undefined && b !== undefined && a.dev === b.dev && a.ino === b.ino;
 }
 
 /** What the operating system objects to, in words. */
@@ -51,6 +58,7 @@ function systemWords(error: unknown): string {
   const words: Record<string, string> = {
     ENOENT: "there is no such file or folder",
     EACCES: "permission denied",
+    ENOTDIR: "a part of its path is no folder",
     EISDIR: "it is a folder",
     ENOSPC: "the disk is full",
     EROFS: "the disk is read-only",

@@ -12,8 +12,8 @@ import { bookModel, modelOf, type ModelFormula, type ModelSheet } from "./book-m
 export interface RecalcNote {
   sheet: string;
   cell: string;
-  /** "error": the cell shows an error; "left": its stored value was kept. */
-  kind: "error" | "left";
+  /** "error": the cell shows an error; "left": it could not be calculated here; "kept": its value changes by itself. The stored value stays in the last two. */
+  kind: "error" | "left" | "kept";
   text: string;
 }
 
@@ -27,12 +27,14 @@ export interface Recalculated {
 
 /** Two numbers nearer than this are one value: a workbook keeps 15 digits, and its own program may round the last one otherwise. */
 const SAME_NUMBER = 1e-13;
+/** The engine's value of a cell that refers to itself; what other programs make of it hangs on their settings. */
+const CIRCLE = "#CYCLE";
 
 /** Recalculates a workbook's formulas and puts the changed values into the original package; every other byte of its parts stays. */
 export function recalculate(engine: Engine, bytes: Uint8Array): Recalculated {
   const book = readWorkbook(bytes);
   const { model: first, sheets } = bookModel(engine, book);
-  const model = withoutOldSpills(engine, first, sheets);
+  const model = settledModel(engine, first, sheets);
   const notes: RecalcNote[] = [];
   const counts = { formulas: 0, wall: 0, changed: 0 };
   const changed = new Map(book.package.parts);
@@ -47,17 +49,30 @@ export function recalculate(engine: Engine, bytes: Uint8Array): Recalculated {
   return { bytes: touched ? writePackage({ ...book.package, parts: changed }) : bytes, notes, counts };
 }
 
-/** A formula stored without an array block shows one value; where the engine would spill it, it is asked for one. */
-function withoutOldSpills(engine: Engine, model: EngineModel, sheets: readonly ModelSheet[]): EngineModel {
+/**
+ * A formula stored without an array block shows one value; where the engine would spill it, it is asked for one. A formula that
+ * the engine cannot read is left with its stored value, on which others may hang.
+ */
+function settledModel(engine: Engine, model: EngineModel, sheets: readonly ModelSheet[]): EngineModel {
   const single = new Set<string>();
+  let unread = false;
   for (const { id, formulas } of sheets) {
-    for (const [reference, { cell, left }] of formulas) {
-      if (left !== undefined || cell.formula?.kind === "array") continue;
-      const zone = model.getters.getSpreadZone(positionOf(id, reference), { ignoreSpillError: true });
+    for (const [reference, formula] of formulas) {
+      if (formula.left !== undefined) continue;
+      const position = positionOf(id, reference);
+      if (model.getters.getCell(position)?.compiledFormula?.isBadExpression) {
+        formula.left = { reason: "its formula is in a form not known here", byItself: false };
+        unread = true;
+      } else if (model.getters.getEvaluatedCell(position).value === CIRCLE) {
+        formula.left = { reason: "it stands in a circle of references, or hangs on one", byItself: false };
+        unread = true;
+      }
+      if (formula.cell.formula?.kind === "array") continue;
+      const zone = model.getters.getSpreadZone(position, { ignoreSpillError: true });
       if (zone && (zone.right > zone.left || zone.bottom > zone.top)) single.add(`${id}!${reference}`);
     }
   }
-  return single.size === 0 ? model : modelOf(engine, sheets, single);
+  return single.size === 0 && !unread ? model : modelOf(engine, sheets, single);
 }
 
 function editsOf(model: EngineModel, part: ModelSheet, notes: RecalcNote[], counts: Recalculated["counts"]): Map<string, CellEdit> {
@@ -73,7 +88,8 @@ function editsOf(model: EngineModel, part: ModelSheet, notes: RecalcNote[], coun
   };
   for (const [reference, formula] of formulas) {
     if (formula.left !== undefined) {
-      notes.push({ sheet: sheet.name, cell: reference, kind: "left", text: `left for Excel, its stored value kept: it uses ${formula.left}` });
+      const { reason, byItself } = formula.left;
+      notes.push({ sheet: sheet.name, cell: reference, kind: byItself ? "kept" : "left", text: byItself ? `stored value kept: ${reason}` : `left for Excel, its stored value kept: ${reason}` });
       continue;
     }
     counts.formulas++;

@@ -12,6 +12,8 @@ export interface PlainFormula {
   functions: string[];
   /** It refers to another book, whose values are not here. */
   outside: boolean;
+  /** A name it uses that the book does not define. */
+  missingName?: string;
 }
 
 /** Turns stored formulas of one workbook into plain ones: `_xlfn.` and add-in prefixes stay (the sheet engine knows them). */
@@ -24,6 +26,9 @@ export function formulaReader(book: Pick<Workbook, "names" | "tables">, sheetAli
     const local = new Set(tokens.filter((t) => /^_xlpm\./i.test(t.value)).map((t) => t.value.slice(6).toUpperCase()));
     const functions: string[] = [];
     let outside = false;
+    let missingName: string | undefined;
+    // Writers that leave out `_xlpm.` give parameters plain names.
+    const hasParameters = tokens.some((t) => t.type === tokenTypes.FUNCTION && /^(?:LET|LAMBDA)$/.test(bareFunction(t.value)));
     const parts = tokens.map((token): string => {
       switch (token.type) {
         case tokenTypes.FUNCTION:
@@ -33,9 +38,13 @@ export function formulaReader(book: Pick<Workbook, "names" | "tables">, sheetAli
           return structured(token.value, sheet, at);
         case tokenTypes.REF_NAMED: {
           const inlined = named(token.value, sheet, at, depth, local);
-          if (inlined === undefined) return token.value;
+          if (inlined === undefined) {
+            if (!hasParameters && !/^_xl(?:pm|eta)\./i.test(token.value)) missingName ??= token.value;
+            return token.value;
+          }
           functions.push(...inlined.functions);
           outside ||= inlined.outside;
+          missingName ??= inlined.missingName;
           return inlined.text;
         }
         default:
@@ -44,7 +53,7 @@ export function formulaReader(book: Pick<Workbook, "names" | "tables">, sheetAli
           return aliased(token);
       }
     });
-    return { text: parts.join(""), functions: functions.filter((f) => !local.has(f)), outside };
+    return { text: parts.join(""), functions: functions.filter((f) => !local.has(f)), outside, ...(missingName === undefined ? {} : { missingName }) };
   }
 
   function named(value: string, sheet: string, at: CellPlace, depth: number, local: ReadonlySet<string>): PlainFormula | undefined {
