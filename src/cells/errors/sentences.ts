@@ -79,6 +79,18 @@ const SENTENCES: Record<Reason, Sentence> = {
     need: (a) => `${a} as a radius, above 0 for flow outside a round body, below 0 (and larger than the traverse) inside a round duct`,
     found: (v) => `it has ${v("value")} with a traverse ${v("height")} high`,
   },
+  "repeats a point": { code: "#VALUE!", need: () => "wall points that differ from their neighbours", found: () => "repeats the point before" },
+  "contour crosses": {
+    code: "#VALUE!",
+    need: () => "points in order along a contour that does not cross itself",
+    found: (v) => `begins a segment that crosses the one from row ${v("other")}`,
+  },
+  "no stagnation point": {
+    code: "#VALUE!",
+    need: () => "taps on both sides of a stagnation point, an inner maximum of cp",
+    found: (v) => `has the highest cp, ${v("value")}, with no lower one on both sides`,
+  },
+  "sides alike": { code: "#VALUE!", need: () => "an upper and a lower side", found: () => "both lie at the same mean height" },
   "profile undetermined": { code: "#N/A", need: () => "a profile that fixes the answer", found: () => "this one does not" },
   "fit undetermined": { code: "#N/A", need: () => "points that determine the fit", found: () => "these do not" },
   "noise undetermined": {
@@ -121,7 +133,8 @@ export function sentenceOf(call: Call, refusal: Refusal): string {
   };
   const sentence = SENTENCES[refusal.reason];
   const place = placeOf(call, refusal);
-  const found = [place, sentence.found(v)].filter((part) => part !== "").join(" ");
+  const words = sentence.found(v);
+  const found = place === "" ? words.replace(/^(?=(?:has|ends|asks|repeats) )/, "it ") : `${place} ${words}`.trim();
   return `${call.name} needs ${sentence.need(refusal.argument ?? "its input", v)}; ${found}`;
 }
 

@@ -3,6 +3,52 @@ import type { CatalogueEntry } from "../catalogue-entry";
 
 export const catalogue: readonly CatalogueEntry[] = [
   {
+    "name": "EDGE_MACH",
+    "family": "Edge",
+    "purpose": "Gives the local Mach number along a wall from its pressure coefficients, one row each.",
+    "parameters": [
+      {
+        "name": "cp",
+        "description": "Pressure coefficients, referred to the reference flow.",
+        "unit": "1",
+        "optional": false
+      },
+      {
+        "name": "mach",
+        "description": "Mach number of the reference flow, above 0.",
+        "unit": "1",
+        "optional": false
+      },
+      {
+        "name": "gamma",
+        "description": "Ratio of specific heats; default 1.4.",
+        "unit": "1",
+        "optional": true
+      }
+    ],
+    "gives": "Local Mach number, one entry a row; 0 at the stagnation value of cp.",
+    "resultUnit": "1",
+    "limits": [
+      "cp above vacuum, −2/(γ M²), up to stagnation, 1 + M²/4 + …; a value outside is refused with its row.",
+      "Isentropic from the reference flow: not behind a shock, in a wake or in a separated region."
+    ],
+    "sources": [
+      "Ames Research Staff, NACA Report 1135 (1953), isentropic relations of a perfect gas."
+    ],
+    "examples": [
+      {
+        "formula": "=ROUND(INDEX(WALL.EDGE_MACH({0;-1},0.5),2),6)",
+        "value": 0.739348
+      }
+    ],
+    "words": [
+      "compressible",
+      "sonic",
+      "local",
+      "pressure"
+    ]
+  },
+  {
     "name": "EDGE_SPEED",
     "family": "Edge",
     "purpose": "Gives the edge speed along a wall from its pressure coefficients, one row each.",
@@ -102,6 +148,57 @@ export const catalogue: readonly CatalogueEntry[] = [
     ]
   },
   {
+    "name": "RESTATION",
+    "family": "Edge",
+    "purpose": "Gives the values of a column at other stations, by the curve through its points, one row each; nothing is extrapolated.",
+    "parameters": [
+      {
+        "name": "x",
+        "description": "Stations, rising.",
+        "unit": "length",
+        "optional": false
+      },
+      {
+        "name": "v",
+        "description": "Value at each station.",
+        "unit": "any",
+        "optional": false
+      },
+      {
+        "name": "new_x",
+        "description": "Stations wanted, in any order, each inside the column.",
+        "unit": "length",
+        "optional": false
+      },
+      {
+        "name": "fit",
+        "description": "spline (default; smooth second derivative) or monotone (no overshoot between points).",
+        "unit": "text",
+        "optional": true
+      }
+    ],
+    "gives": "Value at each new station, one entry a row.",
+    "resultUnit": "as v",
+    "limits": [
+      "New stations between the first and the last of x; one outside gives #N/A with its row.",
+      "The spline follows a smooth column with an error of the fourth power of the spacing; across a kink it swings, where monotone does not."
+    ],
+    "sources": [
+      "C. de Boor, A Practical Guide to Splines (1978); F. N. Fritsch & R. E. Carlson, SIAM J. Numer. Anal. 17 (1980) 238–246."
+    ],
+    "examples": [
+      {
+        "formula": "=INDEX(WALL.RESTATION({0;1;2;3},{0;1;8;27},1.5),1)",
+        "value": 3.375
+      }
+    ],
+    "words": [
+      "interpolate",
+      "resample",
+      "stations"
+    ]
+  },
+  {
     "name": "SMOOTH_COLUMN",
     "family": "Edge",
     "purpose": "Smooths a noisy column by a cubic smoothing spline, one row each.",
@@ -146,6 +243,117 @@ export const catalogue: readonly CatalogueEntry[] = [
       "noise",
       "scatter",
       "filter"
+    ]
+  },
+  {
+    "name": "SURFACE_FROM_TAPS",
+    "family": "Edge",
+    "purpose": "Turns pressure taps round a section into one side's edge-speed column, from the stagnation point (located between the taps) to the tail, ready for a march.",
+    "parameters": [
+      {
+        "name": "x",
+        "description": "First coordinate of the taps, in order along the contour from tail to tail round the nose, in either direction.",
+        "unit": "length",
+        "optional": false
+      },
+      {
+        "name": "y",
+        "description": "Second coordinate of each tap.",
+        "unit": "length",
+        "optional": false
+      },
+      {
+        "name": "cp",
+        "description": "Pressure coefficient of each tap; a blank, - or n/a marks a missing tap, whose coordinates still shape the contour.",
+        "unit": "1",
+        "optional": false
+      },
+      {
+        "name": "side",
+        "description": "upper or lower: the side whose taps lie higher or lower on average.",
+        "unit": "text",
+        "optional": false
+      },
+      {
+        "name": "reference_speed",
+        "description": "Speed of the reference flow.",
+        "unit": "speed",
+        "optional": false
+      },
+      {
+        "name": "mach",
+        "description": "Mach number of the reference flow; omitted or 0: constant density (Bernoulli).",
+        "unit": "1",
+        "optional": true
+      }
+    ],
+    "gives": "A heading row, then station from the stagnation point, surface x and y, edge speed and note in a row each; the first row is the stagnation point with speed 0.",
+    "resultUnit": "length, speed",
+    "limits": [
+      "Six taps at least, three on a side; cp from vacuum to 2 % above the stagnation value (what lies above counts as stagnation and is noted). A doubled tail point is dropped, a contour that crosses itself or cp without an inner maximum is refused.",
+      "With 24 taps round a cylinder the stagnation point is found within 1e-4 of its radius. On desktop Excel a blank cell may arrive as 0, which is a possible cp: mark missing taps with - there.",
+      "Same total pressure all along: no shock, no separated region. Where the flow passes the speed of sound a note says so."
+    ],
+    "sources": [
+      "Own definition of stagnation point and side; speed by Bernoulli or NACA Report 1135 (1953)."
+    ],
+    "examples": [
+      {
+        "formula": "=INDEX(WALL.SURFACE_FROM_TAPS({1;0.5;0.1;0;0.1;0.5;1},{0;0.1;0.08;0;-0.08;-0.1;0},{0;-0.44;-0.69;1;-0.69;-0.44;0},\"upper\",10),3,4)",
+        "value": 13
+      }
+    ],
+    "words": [
+      "pressure",
+      "taps",
+      "aerofoil",
+      "airfoil",
+      "section",
+      "stagnation",
+      "contour",
+      "upper",
+      "lower"
+    ]
+  },
+  {
+    "name": "SURFACE_LENGTH",
+    "family": "Edge",
+    "purpose": "Gives the arc length along a wall from its coordinates, 0 at the first point, one row each.",
+    "parameters": [
+      {
+        "name": "x",
+        "description": "First coordinate of the wall points, in order along the wall.",
+        "unit": "length",
+        "optional": false
+      },
+      {
+        "name": "y",
+        "description": "Second coordinate of each point.",
+        "unit": "length",
+        "optional": false
+      }
+    ],
+    "gives": "Arc length from the first point, one entry a row.",
+    "resultUnit": "length",
+    "limits": [
+      "A smooth wall: the spline rounds a corner, so end one column at it and begin the next there. Neighbouring points must differ.",
+      "A circle of 24 points has its circumference within 2e-5, one of 48 within 1e-6."
+    ],
+    "sources": [
+      "C. de Boor, A Practical Guide to Splines (1978), curves over chord length; Gauss quadrature of the arc."
+    ],
+    "examples": [
+      {
+        "formula": "=ROUND(INDEX(WALL.SURFACE_LENGTH({0;3;6},{0;4;8}),3),9)",
+        "value": 10
+      }
+    ],
+    "words": [
+      "arc",
+      "distance",
+      "contour",
+      "coordinates",
+      "station"
     ]
   },
   {

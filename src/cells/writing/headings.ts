@@ -29,6 +29,8 @@ export const HEADINGS = [
   { key: "heat", heading: "Stanton number St", symbol: "St" },
   { key: "value", heading: "value", symbol: "v" },
   { key: "uncertainty", heading: "± standard error", symbol: "±" },
+  { key: "surface_x", heading: "surface x", symbol: "xs" },
+  { key: "surface_y", heading: "surface y", symbol: "ys" },
   { key: "height", heading: "height y", symbol: "y" },
   { key: "similar_height", heading: "similar height η", symbol: "η" },
   { key: "speed", heading: "speed u", symbol: "u" },

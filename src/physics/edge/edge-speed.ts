@@ -36,7 +36,7 @@ export function edgeSpeed(
   const g1 = gamma - 1;
   const bernoulli = mach < INCOMPRESSIBLE;
   const q = (gamma * mach * mach) / 2;
-  const stagnation = bernoulli ? 1 : Math.expm1((gamma / g1) * Math.log1p((g1 / 2) * mach * mach)) / q;
+  const stagnation = stagnationPressure(mach, gamma);
   const vacuum = bernoulli ? -Infinity : -1 / q;
   const speed = new Float64Array(cp.length);
   for (let i = 0; i < cp.length; i += 1) {
@@ -49,6 +49,12 @@ export function edgeSpeed(
     if (!Number.isFinite(speed[i])) return refuse("not finite", { argument: "cp", row: i + 1, values: { value: cp[i] } });
   }
   return { ok: true, speed };
+}
+
+/** Pressure coefficient of the stagnation point [1]: 1, or 1 + M²∕4 + … with a Mach number (NACA Report 1135). */
+export function stagnationPressure(mach: number, gamma: number): number {
+  if (mach < INCOMPRESSIBLE) return 1;
+  return Math.expm1((gamma / (gamma - 1)) * Math.log1p(((gamma - 1) / 2) * mach * mach)) / ((gamma * mach * mach) / 2);
 }
 
 function checkReference(referenceSpeed: number, mach: number, gamma: number): Refusal | null {
