@@ -36,7 +36,7 @@ export function odeDrive(right: OdeRight, x: number, y: Float64Array, settings: 
   const next = new Float64Array(n);
   const error = new Float64Array(n);
   const counts = { steps: 0, rejected: 0, largestError: 0 };
-  let fresh = right(x, state, slope);
+  const fresh = right(x, state, slope);
   let wanted = settings.firstStep;
   const { event } = settings;
 

@@ -5,6 +5,10 @@ import type { FieldGrid, ProfileIntegrals } from "./field-grid";
 import { fieldGrid, profileIntegrals, raiseGrid, STILL } from "./field-grid";
 import type { FieldScale } from "./field-scale";
 import { fieldScale } from "./field-scale";
+import type { PastProfile } from "./field-past";
+import { combine, emptyProfile, storedProfile } from "./field-past";
+import type { FieldPath } from "./field-path";
+import { fieldPath } from "./field-path";
 import type { FieldRecord, FieldRun, StepPlan } from "./field-record";
 import { rootLawSeparation } from "./field-separation";
 import type { MarchStart, StartOptions } from "./field-start";
@@ -29,6 +33,8 @@ export interface FieldOptions extends StartOptions {
 const ROOT_LAW_REACH = 2e-5;
 /** Wall shear number S below which a march that cannot go on is taken to separate. */
 const NEARLY_SEPARATED = 0.03;
+/** Length in which a given start settles, over θ² ue∕ν: a thousandth of the way in which the layer itself changes. */
+const SETTLING = 1e-3;
 /** Shortest step, over the wall length: separation is closer than that. */
 const SHORTEST = 1e-9;
 /** Share of the way to the next station from which a step covers it all. */
@@ -61,8 +67,9 @@ class FieldMarcher {
   private readonly grid: FieldGrid;
   private readonly work: StepWork;
   private readonly refinement: number;
-  /** Steps are taken in √(x − x₁): flow through the wall behind a leading edge, or a start that need not fit what follows. */
-  private readonly rooted: boolean;
+  /** Variable along the wall up to which a given start is left to settle: its profile bends in no time where it does not fit the gradient. */
+  private readonly settling: number;
+  private readonly path: FieldPath;
   /** Profiles at the last places, newest first, with x and Δ²; and the step's combination, first guess and solution. */
   private past: PastProfile[] = [];
   private readonly carried: FieldProfile;
@@ -89,7 +96,9 @@ class FieldMarcher {
     private readonly options: FieldOptions,
   ) {
     this.refinement = options.refinement ?? 1;
-    this.rooted = start.kind === "given momentum loss" || (start.kind === "leading edge" && wall.wallVelocity !== null);
+    this.path = fieldPath(wall, start);
+    const { value } = wall.edge.curve;
+    this.settling = start.kind === "given momentum loss" ? Math.sqrt((SETTLING * start.square * value[0]) / nu) : 0;
     this.grid = fieldGrid(this.refinement);
     this.work = stepWork(this.grid.eta.length);
     this.carried = emptyProfile(this.grid);
@@ -117,19 +126,20 @@ class FieldMarcher {
   private chooseSteps(): void {
     const { wall, result } = this;
     const { x } = wall.edge.curve;
-    const length = this.along(x[x.length - 1]);
+    const length = this.path.along(x[x.length - 1]);
     let stride = (FIRST_STRIDE * length) / this.refinement;
     for (let panel = 0; panel + 1 < x.length; panel += 1) {
-      const end = this.along(x[panel + 1]);
+      const end = this.path.along(x[panel + 1]);
       let t = 0;
-      let at = this.along(x[panel]);
+      let at = this.path.along(x[panel]);
       while (t < 1) {
         const left = end - at;
         // A step a little longer than asked rather than a stub before the station; else two equal ones.
         const step = stride >= NEARLY * left ? left : stride > left / 2 ? left / 2 : stride;
-        const to = step === left ? 1 : this.fraction(panel, at + step);
+        const to = step === left ? 1 : this.path.fraction(panel, at + step);
         const record = this.step(panel, t, to) ? this.record() : null;
-        const decision = nextStride(step, record ? strideError(this.history, record) : Infinity, this.refinement);
+        const error = record === null ? Infinity : at < this.settling ? 0 : strideError(this.history, record);
+        const decision = nextStride(step, error, this.refinement);
         if (record === null || !decision.accept || !(record.shear > 0)) {
           result.counts.rejected += 1;
           stride = record !== null && !decision.accept ? decision.stride : step / 2;
@@ -144,19 +154,6 @@ class FieldMarcher {
         if (this.separates(panel, t, record)) return;
       }
     }
-  }
-
-  /** The variable along the wall: x, or √(x − x₁) where the layer begins as a power series in that. */
-  private along(x: number): number {
-    const first = this.wall.edge.curve.x[0];
-    return this.rooted ? Math.sqrt(x - first) : x - first;
-  }
-
-  /** The fraction of a panel where the variable along the wall has a value. */
-  private fraction(panel: number, along: number): number {
-    const { x } = this.wall.edge.curve;
-    const at = x[0] + (this.rooted ? along * along : along);
-    return (at - x[panel]) / (x[panel + 1] - x[panel]);
   }
 
   /** True when separation is so close that no station lies before it, or it cannot be told from the place reached. */
@@ -174,11 +171,11 @@ class FieldMarcher {
   private followPlan(plan: readonly StepPlan[], split: number): void {
     const { x } = this.wall.edge.curve;
     for (const { panel, from, to } of plan) {
-      const begin = this.along(x[panel] + from * (x[panel + 1] - x[panel]));
-      const end = this.along(x[panel] + to * (x[panel + 1] - x[panel]));
+      const begin = this.path.along(x[panel] + from * (x[panel + 1] - x[panel]));
+      const end = this.path.along(x[panel] + to * (x[panel + 1] - x[panel]));
       for (let k = 0; k < split; k += 1) {
-        const t0 = k === 0 ? from : this.fraction(panel, begin + ((end - begin) * k) / split);
-        const t1 = k + 1 === split ? to : this.fraction(panel, begin + ((end - begin) * (k + 1)) / split);
+        const t0 = k === 0 ? from : this.path.fraction(panel, begin + ((end - begin) * k) / split);
+        const t1 = k + 1 === split ? to : this.path.fraction(panel, begin + ((end - begin) * (k + 1)) / split);
         const record = this.step(panel, t0, t1) ? this.record() : null;
         if (record === null || !(record.shear > 0)) return this.halt();
         this.accept(record, { panel, from: t0, to: t1 });
@@ -198,7 +195,7 @@ class FieldMarcher {
     const square = this.scale.next(past[0].square, panel, from, before, to, place);
     if (!(square > 0 && square < Infinity)) return false;
     this.nextSquare = square;
-    const here = this.along(place.x);
+    const here = this.path.along(place.x);
     places[0] = place.x;
     const known = Math.min(past.length, PLACES - 1);
     for (let i = 0; i < known; i += 1) places[i + 1] = past[i].x;
@@ -206,7 +203,7 @@ class FieldMarcher {
     backwardDifference(places, known + 1, slope);
     let growth = slope[0] * square;
     for (let i = 0; i < known; i += 1) growth += slope[i + 1] * past[i].square;
-    if (this.rooted) {
+    if (this.path.rooted) {
       places[0] = here;
       for (let i = 0; i < known; i += 1) places[i + 1] = past[i].along;
       backwardDifference(places, known + 1, slope);
@@ -245,7 +242,7 @@ class FieldMarcher {
     this.result.plan.push(plan);
     this.result.counts.steps += 1;
     const { keep } = this.options;
-    if (keep && keep.panel === plan.panel && keep.t === plan.to) this.keepProfile(record);
+    if (keep && keep.panel === plan.panel && keep.t === plan.to) this.result.profiles.push(storedProfile(this.grid, past[0], record));
   }
 
   /** The record at `place` of the profile in `next`. */
@@ -255,7 +252,7 @@ class FieldMarcher {
     profileIntegrals(this.grid, next, integrals);
     return {
       x: place.x,
-      along: this.along(place.x),
+      along: this.path.along(place.x),
       speed: place.speed,
       speedSlope: place.speedSlope,
       momentumLoss: scale * integrals.momentumLoss,
@@ -288,18 +285,6 @@ class FieldMarcher {
     return (start.layer.shape * start.growth) / (2 * scale) + (start.layer.shape * scale * place.radiusSlope) / place.radius;
   }
 
-  private keepProfile(record: FieldRecord): void {
-    const { square, profile } = this.past[0];
-    const scale = Math.sqrt(square);
-    const { count, eta } = this.grid;
-    this.result.profiles.push({
-      x: record.x,
-      height: Float64Array.from({ length: count }, (_, j) => scale * eta[j]),
-      speed: Float64Array.from({ length: count }, (_, j) => record.speed * profile.u[j]),
-      shear: Float64Array.from({ length: count }, (_, j) => (record.speed * profile.v[j]) / scale),
-    });
-  }
-
   /** No step can be made from here: separation, lift-off, or a limit. */
   private halt(): void {
     const { result } = this;
@@ -313,35 +298,5 @@ class FieldMarcher {
   /** Blowing into an edge speed that does not fall. */
   private liftsOff(): boolean {
     return this.place.wallVelocity > 0 && this.place.speedSlope >= 0;
-  }
-}
-
-interface PastProfile {
-  x: number;
-  along: number;
-  square: number;
-  /** δ*∕Δ. */
-  defect: number;
-  profile: FieldProfile;
-}
-
-function emptyProfile(grid: FieldGrid): FieldProfile {
-  const room = grid.eta.length;
-  return { f: new Float64Array(room), u: new Float64Array(room), v: new Float64Array(room) };
-}
-
-/** out = factor · Σ weight[i + shift] · past[i], for nodes from … to. */
-function combine(past: readonly PastProfile[], count: number, weight: Float64Array, shift: number, factor: number, out: FieldProfile, from: number, to: number): void {
-  out.f.fill(0, from, to);
-  out.u.fill(0, from, to);
-  out.v.fill(0, from, to);
-  for (let i = 0; i < count; i += 1) {
-    const w = factor * weight[i + shift];
-    const { f, u, v } = past[i].profile;
-    for (let j = from; j < to; j += 1) {
-      out.f[j] += w * f[j];
-      out.u[j] += w * u[j];
-      out.v[j] += w * v[j];
-    }
   }
 }
