@@ -4,7 +4,7 @@ export const USAGE = {
 
 usage: wallsheet COMMAND [ARGUMENTS] [--help]
 
-  recalc IN.xlsx -o OUT.xlsx   recalculate a workbook's WALL cells and what depends on them
+  recalc IN.xlsx -o OUT.xlsx   recalculate a workbook: WALL cells, what they read and what reads them
   eval FORMULA                 calculate one formula and print it
   list [NAME]                  list the functions, or show one with its limits and sources
 

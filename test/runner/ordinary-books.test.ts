@@ -1,0 +1,157 @@
+import { Workbook } from "exceljs";
+import { strFromU8, strToU8, unzipSync, zipSync } from "fflate";
+import { engineHere } from "../../src/runner/engine-here";
+import { recalculate } from "../../src/runner/recalculate";
+
+/** Books made in the test itself: by exceljs, a writer that shares no code with this project, and by hand for what no writer makes. */
+const engine = engineHere();
+const SHEET = "xl/worksheets/sheet1.xml";
+
+async function written(fill: (book: Workbook) => void): Promise<Uint8Array> {
+  const book = new Workbook();
+  book.created = book.modified = new Date(Date.UTC(2026, 0, 1));
+  fill(book);
+  return new Uint8Array(await book.xlsx.writeBuffer());
+}
+
+/** Read again by exceljs: the value a formula cell shows. */
+async function read(bytes: Uint8Array): Promise<(cell: string, sheet?: string) => unknown> {
+  const book = new Workbook();
+  await book.xlsx.load(bytes.slice().buffer as never);
+  return (cell, sheet) => {
+    const { value } = (sheet === undefined ? book.worksheets[0]! : book.getWorksheet(sheet)!).getCell(cell);
+    if (value !== null && typeof value === "object" && ("formula" in value || "sharedFormula" in value)) return (value as { result?: unknown }).result;
+    return value;
+  };
+}
+
+/** Column A holds formulas with the value 5 stored; H1:H3 hold 3, 4, 5. */
+function byHand(formulas: readonly string[], settings = "", more = ""): Uint8Array {
+  const xml = (text: string) => text.replace(/&/g, "&amp;").replace(/</g, "&lt;");
+  const rows = Array.from({ length: Math.max(3, formulas.length) }, (_, i) => {
+    const formula = formulas[i] === undefined ? "" : `<c r="A${i + 1}"><f>${xml(formulas[i])}</f><v>5</v></c>`;
+    return `<row r="${i + 1}">${formula}${i < 3 ? `<c r="H${i + 1}"><v>${3 + i}</v></c>` : ""}${i === 0 ? more : ""}</row>`;
+  });
+  const parts: Record<string, string> = {
+    "_rels/.rels": '<Relationships><Relationship Id="a" Type="http://schemas.openxmlformats.org/officeDocument/2006/relationships/officeDocument" Target="/xl/workbook.xml"/></Relationships>',
+    "xl/workbook.xml": `<workbook xmlns:r="r">${settings}<sheets><sheet name="S" sheetId="1" r:id="r1"/><sheet name="Wall's run 2" sheetId="2" r:id="r2"/></sheets></workbook>`,
+    "xl/_rels/workbook.xml.rels": ["worksheets/sheet1.xml", "/xl/worksheets/sheet2.xml"].map((target, i) => `<Relationship Id="r${i + 1}" Type="t/worksheet" Target="${target}"/>`).join(""),
+    [SHEET]: `<worksheet><sheetData>${rows.join("")}</sheetData></worksheet>`,
+    "xl/worksheets/sheet2.xml": '<worksheet><sheetData><row r="1"><c r="A1"><v>7</v></c></row></sheetData></worksheet>',
+  };
+  return zipSync(Object.fromEntries(Object.entries(parts).map(([name, text]) => [name, strToU8(text)])));
+}
+
+function storedCell(bytes: Uint8Array, cell: string): string {
+  return new RegExp(`<c r="${cell}"[^>]*>.*?</c>`).exec(strFromU8(unzipSync(bytes)[SHEET]!))![0].replace(/<f[ >].*?<\/f>/, "");
+}
+
+describe("recalc of a book by exceljs", () => {
+  it("fills the fixed block of an array formula, and what reads it", async () => {
+    const file = await written((book) => {
+      const sheet = book.addWorksheet("Wall's run 2"); // invented
+      sheet.getColumn(1).width = 14;
+      sheet.addRow(["cp (invented)", "speed"]);
+      [1, 0.75, 0, -3].forEach((cp, i) => (sheet.getCell(`A${i + 2}`).value = cp));
+      sheet.getCell("C2").value = { formula: "_xldudf_WALL_EDGE_SPEED(A2:A5,10)", shareType: "array", ref: "C2:C5" } as never;
+      sheet.getCell("E1").value = { formula: "SUM(C2:C5)", result: 0 } as never;
+      sheet.getCell("E2").value = { formula: "A2*10", result: 0 } as never;
+      sheet.getCell("E3").value = { sharedFormula: "E2", result: 0 } as never;
+      sheet.getCell("E4").value = { formula: "IF(A4=0,\"zero & <none>\",1)", result: "" } as never;
+      sheet.getCell("E5").value = { formula: "A5<0", result: false } as never;
+      sheet.getCell("F1").note = "left alone";
+      book.addWorksheet("second").getCell("B2").value = { formula: "'Wall''s run 2'!E1*2", result: 0 } as never;
+    });
+    const { bytes, notes } = recalculate(engine, file);
+    expect(notes).toEqual([]);
+    const value = await read(bytes);
+    // Bernoulli: ue = 10 √(1 − cp).
+    expect(["C3", "C4", "C5"].map((c) => value(c))).toEqual([5, 10, 20]);
+    expect(value("E1")).toBe(35);
+    expect([value("E2"), value("E3"), value("E4"), value("E5")]).toEqual([10, 7.5, "zero & <none>", true]);
+    expect(value("B2", "second")).toBe(70);
+    expect(recalculate(engine, bytes).bytes).toBe(bytes);
+    const before = unzipSync(file);
+    const after = unzipSync(bytes);
+    for (const name of Object.keys(before)) if (!/worksheets\/sheet\d/.test(name)) expect(Buffer.from(after[name]!).equals(Buffer.from(before[name]!))).toBe(true);
+  });
+
+  it("lets a dynamic spill grow below and beside the used part of the sheet", async () => {
+    const file = await written((book) => {
+      const sheet = book.addWorksheet("Plate"); // invented
+      [0, 0.5, 1].forEach((x, i) => (sheet.getCell(`A${i + 1}`).value = x));
+      sheet.getCell("C2").value = { formula: "_xldudf_WALL_THWAITES_MARCH(A1:A3,A1:A3*0+2,0.00002)", shareType: "array", ref: "C2", result: 0 } as never;
+    });
+    const parts = unzipSync(file);
+    // exceljs cannot mark a cell as dynamic.
+    parts[SHEET] = strToU8(strFromU8(parts[SHEET]!).replace('<c r="C2"', '<c r="C2" cm="1"'));
+    const { bytes } = recalculate(engine, zipSync(parts));
+    const xml = strFromU8(unzipSync(bytes)[SHEET]!);
+    const [, ref, column] = /ref="(C2:([A-Z]+)5)"/.exec(xml)!;
+    expect(xml).toContain(`<dimension ref="A1:${column}5"/>`);
+    expect(ref).toMatch(/^C2:[H-Z]5$/);
+    expect([...xml.matchAll(/<row r="(\d+)"/g)].map((m) => Number(m[1]))).toEqual([1, 2, 3, 4, 5]);
+    for (const row of xml.match(/<row r.*?<\/row>/g)!) {
+      const columns = [...row.matchAll(/<c r="([A-Z]+)\d+"/g)].map((m) => m[1]!.padStart(3));
+      expect(columns).toEqual([...columns].sort());
+      const spans = /spans="(\d+):(\d+)"/.exec(row);
+      if (spans && columns.length > 0) expect(Number(spans[2])).toBeGreaterThanOrEqual(columns.at(-1)!.trim().charCodeAt(0) - 64);
+    }
+    // Thwaites on a flat plate: θ = √(0.45 ν x / ue).
+    const value = await read(bytes);
+    const theta = ["C", "D", "E", "F"].find((c) => value(`${c}2`) === "momentum loss θ")!;
+    expect(value(`${theta}5`)).toBeCloseTo(Math.sqrt((0.45 * 2e-5 * 1) / 2), 12);
+    expect(recalculate(engine, bytes).bytes).toBe(bytes);
+  });
+});
+
+describe("formulas the engine does not calculate", () => {
+  it.each([
+    ["SUM((H1,H2))", /a form not known here/],
+    ["SUM(H1:INDEX(H1:H9,3))", /a form not known here/],
+    ["(", /a form not known here/],
+    ["SUM(S:'Wall''s run 2'!A1)", /left for Excel/],
+    ["nosuch*2", /the name nosuch, which the book does not define/],
+    ["'[2]Other'!A1", /a link to another book/],
+    ["_xldudf_WALL_NOSUCH(1)", /the function WALL_NOSUCH, unknown here/],
+    ["_xlfn.FUTURE.THING(H1)", /the function FUTURE\.THING, unknown here/],
+    ["A1+1", /a circle of references/],
+  ])("%s keeps its stored value, and the cell that reads it uses that", (formula, reason) => {
+    const { bytes, notes } = recalculate(engine, byHand([formula, "A1*2"]));
+    expect(storedCell(bytes, "A1")).toContain("<v>5</v>");
+    expect(notes[0]).toMatchObject({ sheet: "S", cell: "A1", kind: "left", text: expect.stringMatching(reason) });
+    if (formula !== "A1+1") expect(storedCell(bytes, "A2")).toContain("<v>10</v>");
+  });
+
+  it.each(["RAND()", "TODAY()", "NOW()*1"])("%s keeps its stored value, so that a second run changes nothing", (formula) => {
+    const { bytes, notes } = recalculate(engine, byHand([formula, "A1*2"]));
+    expect([storedCell(bytes, "A1"), storedCell(bytes, "A2")]).toEqual(['<c r="A1"><v>5</v></c>', '<c r="A2"><v>10</v></c>']);
+    expect(notes.map((n) => n.kind)).toEqual(["kept"]);
+  });
+
+  it("dates of a book that counts from 1904 are left, plain sums are not", () => {
+    const { bytes, notes } = recalculate(engine, byHand(["YEAR(H1+40000)", "H1+H2"], '<workbookPr date1904="1"/>'));
+    expect([storedCell(bytes, "A1"), storedCell(bytes, "A2")]).toEqual(['<c r="A1"><v>5</v></c>', '<c r="A2"><v>7</v></c>']);
+    expect(notes).toEqual([{ sheet: "S", cell: "A1", kind: "left", text: expect.stringContaining("counts days from 1904") }]);
+  });
+});
+
+describe("formulas and texts as files hold them", () => {
+  it.each([
+    ["'Wall''s run 2'!A1+1", "<v>8</v>"],
+    ["-H1^2", "<v>9</v>"],
+    ["SUM(H:H)", "<v>12</v>"],
+    ["H1%", "<v>0.03</v>"],
+    ["[1]!WALL.EDGE_SPEED(0,H1)", "<v>3</v>"],
+    ["wall.edge_speed(0,H1)", "<v>3</v>"],
+    ["_XLDUDF_WALL_EDGE_SPEED(0,H1)", "<v>3</v>"],
+    ["I1", "<v>=1+1</v>"],
+    ["J1", "<v>1e5</v>"],
+    ["K1&\"!\"", "<v>TRUE!</v>"],
+    ["Z9", "<v>0</v>"],
+    ["H1:H3", "<v>3</v>"], // stored without an array: the row's own value
+  ])("%s", (formula, value) => {
+    const texts = ["=1+1", "1e5", "TRUE"].map((text, i) => `<c r="${"IJK"[i]}1" t="inlineStr"><is><t>${text}</t></is></c>`).join("");
+    expect(storedCell(recalculate(engine, byHand([formula], "", texts)).bytes, "A1")).toContain(value);
+  });
+});
