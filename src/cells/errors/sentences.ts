@@ -134,7 +134,7 @@ export function sentenceOf(call: Call, refusal: Refusal): string {
   const sentence = SENTENCES[refusal.reason];
   const place = placeOf(call, refusal);
   const words = sentence.found(v);
-  const found = place === "" ? words.replace(/^(?=(?:has|ends|asks|repeats) )/, "it ") : `${place} ${words}`.trim();
+  const found = place === "" ? words.replace(/^(?=(?:has|ends|asks|repeats|blows) )/, "it ") : `${place} ${words}`.trim();
   return `${call.name} needs ${sentence.need(refusal.argument ?? "its input", v)}; ${found}`;
 }
 
