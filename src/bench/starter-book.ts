@@ -1,6 +1,7 @@
 import { CAUTIONS } from "../cells/cautions";
 import { readAddress, type CellBlock } from "../pane/cell-block";
 import { chartFigure } from "./chart-figure";
+import { threeMarches } from "./three-marches";
 
 /**
  * The book the bench opens on: an invented survey glider's wing section, upper side. The edge speeds are made up with the shape an
@@ -128,6 +129,10 @@ export function starterBook(): Record<string, unknown> {
           ),
         ],
       },
+      threeMarches(
+        { sheet: SHEET, x: rows("A"), ue: rows("B"), nu: "B6", stations: STATIONS.length },
+        { title: 1, remark: 2, caution: 3, unit: 6, heading: 7, station: 1, small: 4, ratio: 6 },
+      ),
     ],
     styles: STYLES,
     formats: FORMATS,
