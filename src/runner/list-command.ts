@@ -2,8 +2,8 @@ import { parseArgs } from "node:util";
 import type { CatalogueEntry } from "../cells/catalogue-entry";
 import { CAUTIONS } from "../cells/cautions";
 import { catalogue } from "../cells/generated/catalogue";
-import { nearestWord } from "../cells/reading/nearest-word";
 import { refused, type CommandResult } from "./command-result";
+import { nearestFunction } from "./nearest-function";
 import { USAGE } from "./usage";
 
 /** `wallsheet list [NAME]` */
@@ -15,7 +15,7 @@ export function listCommand(args: readonly string[]): CommandResult {
   if (name === undefined) return said(values.json ? JSON.stringify(catalogue, null, 2) + "\n" : overview());
   const wanted = name.toUpperCase().replace(/^=?WALL\./, "");
   const entry = catalogue.find((e) => e.name === wanted);
-  if (!entry) return refused(`there is no function ${name}; the nearest is ${nearestWord(wanted, catalogue.map((e) => e.name))}`);
+  if (!entry) return refused(`there is no function ${name}; the nearest is ${nearestFunction(wanted, catalogue.map((e) => e.name))}`);
   return said(values.json ? JSON.stringify(entry, null, 2) + "\n" : card(entry));
 }
 
