@@ -29,9 +29,9 @@ const ACCEPTED = ["start momentum loss", "start shape", "edge fit", "noise", "af
  * @unit wall_velocity speed
  * @unit result lengths, speeds and ratios in the units of x and ue
  * @limits Steady laminar layer of constant density on a smooth wall, thin beside the wall's radii; wall flow vw θ/ν from −1 (suction) to 0.6 (blowing), acceleration short of sink flow (H above 2.08 on a solid wall): the station where a limit is met is reported.
- * @limits Error of the method itself against full solutions of four laminar layers (1 − x, 1 − x², sin x, Hiemenz's cylinder): θ within 0.5 % up to nine tenths of the way to separation and 1.1 % up to separation, δ* 2.5 %, cf 6 %; separation station −0.05 % to +1.2 %; sphere 105.7° for 104.8°.
+ * @limits Error of the method itself against full solutions of four laminar layers (1 − x, 1 − x², sin x, Hiemenz's cylinder): θ within 0.5 % up to nine tenths of the way to separation and 1.2 % up to separation, δ* 2.5 %, cf 6 %; separation station −0.05 % to +1.2 %; sphere 105.7° for 104.8°.
  * @limits Exact for similar layers: flat plate within 0.0001 %, stagnation points with suction or blowing 0.001 %; asymptotic suction layer H = 2 within 0.02 %, on the way there θ within 1 %.
- * @limits 15 stations change the separation station by less than 0.01 % (edge fit = spline).
+ * @limits 15 stations change the separation station of seven decelerating flows by less than 0.01 % and θ by less than 0.002 % (edge fit = spline).
  * @limits Beyond separation a given edge speed does not determine the layer; after separation = continue carries θ on by the momentum equation with the shape held and no wall shear. No transition: the layer is taken as laminar throughout.
  * @source K. Wieghardt, Ing.-Arch. 16 (1948) 231–242, and I. Tani, J. Aero. Sci. 21 (1954) 487–495 (momentum and kinetic-energy equations; from memory).
  * @source Closure: Chebyshev fit to the similar layers of SIMILAR_LAYER with flow through the wall (own; Falkner & Skan 1930).

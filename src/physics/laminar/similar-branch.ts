@@ -20,6 +20,8 @@ const SUCTION_HEIGHT = 36;
 const GROWTH = 0.17;
 /** A layer that needs more height than this has left the wall (flat plate: 7; blown to within 0.2 % of lift-off: 25; reversed at m = −0.001: 28). */
 const MOST_HEIGHT = 35;
+/** f(0) that blows a flat plate's layer off; decelerating layers go before (Emmons & Leigh 1954: −0.8757). */
+const LIFT_OFF = -0.8757;
 /** Least part of the way to the wanted layer; below it the branch ends, or the layer has left the wall. */
 const LEAST_STRIDE = 1e-4;
 const LEAST_STRIDE_BLOWN = 3e-3;
@@ -40,6 +42,7 @@ const ROUNDING = 2e-7;
  *   found), "layer lifts off" where blowing lifts it off the wall
  */
 export function similarBranch(beta: number, wall: number, branch: SimilarBranch): Outcome<{ nodes: SimilarNodes }> {
+  if (beta <= 0 && wall <= LIFT_OFF) return refuse("layer lifts off", { argument: "wall_velocity" });
   const start = attached(Math.max(beta, 0), wall);
   if (!start.ok || beta >= 0) return start;
   // The layer of least β, f″(0) = 0, parts the branches; along the defect thickness nothing special happens there.

@@ -48,3 +48,16 @@ describe.each(CLASSIC_FLOWS.map((flow) => [flow.name, flow] as const))("the thre
     expect(Math.abs(separationStation(fieldOf(wallOf(coarse, coarse.map(flow.ue)))) / separation - 1)).toBeLessThan(1e-3);
   });
 });
+
+describe("separation of the field march against the literature", () => {
+  // From memory: I. Tani, J. Phys. Soc. Japan 4 (1949) 149–154 by series, three decimals (and as quoted by Curle 1962); R. M. Terrill, Phil. Trans. A 253
+  // (1960) 55–100: sin x, 104.45°; D. R. Hartree 1939 and later marches of Howarth's flow: 0.1198.
+  it.each([["1 − x (Howarth 1938)", 0.1198, 1e-4], ["1 − x^2 (Tani 1949)", 0.271, 1e-3], ["1 − x^4 (Tani 1949)", 0.462, 1e-3], ["1 − x^8 (Tani 1949)", 0.64, 1e-3], ["sin x", (104.45 * Math.PI) / 180, 5e-4]])(
+    "%s: %d",
+    (name, printed, digits) => {
+      const flow = CLASSIC_FLOWS.find((f) => f.name === name)!;
+      const x = spaced(101, 0, flow.before);
+      expect(Math.abs(separationStation(fieldOf(wallOf(x, x.map(flow.ue)), 1, { richardson: true })) - printed)).toBeLessThan(digits);
+    },
+  );
+});
