@@ -22,7 +22,7 @@ const METHODS = [
   { name: "ENERGY_MARCH", label: "momentum and energy", column: "G" },
   { name: "FIELD_MARCH", label: "full equations", column: "K" },
 ] as const;
-const CHART = { width: 420, height: 380 };
+const CHART = { width: 394, height: 372 };
 
 /** A sheet that marches one edge-speed column by the three laminar methods side by side, so that their spread can be seen. */
 export function threeMarches(source: { sheet: string; x: string; ue: string; nu: string; stations: number }, look: SheetLook): Record<string, unknown> {

@@ -2,10 +2,14 @@ import { existsSync, mkdirSync, readFileSync, writeFileSync } from "node:fs";
 import { gzipSync } from "node:zlib";
 import { Bench } from "tinybench";
 import { wallFunctions } from "../../src/cells/generated/functions";
+import { edgeCurve } from "../../src/physics/edge/edge-curve";
+import { thwaitesMarch } from "../../src/physics/laminar/thwaites-march";
 
 // `npm run measure`: times per call and per station, the growth exponent, and bundle sizes; a table on the screen and JSON in test/output/.
 // The named alternative in the same run is the floor: a bare typed-array trapezoid of ue⁵ over the same columns, without any checking.
 const STATIONS = [20, 200, 2_000, 200_000];
+const MARCHES = ["THWAITES_MARCH", "ENERGY_MARCH", "FIELD_MARCH"];
+const MARCH_STATIONS = 200;
 const BUNDLES = ["functions.js", "taskpane.js", "bench.js", "wallsheet.js", "functions.json"];
 const SHORTEST_MS = 400;
 
@@ -14,6 +18,9 @@ interface Timing {
   marchMs: number;
   perStationNs: number;
   spreadPercent: number;
+  /** Curve and march alone, columns in, columns out. */
+  physicsMs: number;
+  physicsPerStationNs: number;
   floorMs: number;
   ratioToFloor: number;
 }
@@ -27,13 +34,17 @@ async function main(): Promise<void> {
   });
   const first = timings[1]!;
   const last = timings.at(-1)!;
-  const growth = Math.log(last.marchMs / first.marchMs) / Math.log(last.stations / first.stations);
+  const exponent = (of: (t: Timing) => number) => Math.log(of(last) / of(first)) / Math.log(last.stations / first.stations);
+  const growth = { wholeCall: round(exponent((t) => t.marchMs)), physics: round(exponent((t) => t.physicsMs)) };
   console.log("THWAITES_MARCH, whole cell call (ranges read, marched, table spilled); floor = bare typed-array trapezoid of ue⁵");
   console.table(timings);
-  console.log(`growth exponent from ${first.stations} to ${last.stations} stations: ${growth.toFixed(3)}`);
+  console.log(`growth exponent from ${first.stations} to ${last.stations} stations: whole call ${growth.wholeCall}, physics ${growth.physics}`);
+  const marches = await rivals();
+  console.log(`laminar marches over ${MARCH_STATIONS} stations, whole cell call; ratio to THWAITES_MARCH of the same run`);
+  console.table(marches);
   console.table(sizes);
   mkdirSync("test/output", { recursive: true });
-  writeFileSync("test/output/measure.json", JSON.stringify({ node: process.version, timings, growth, sizes }, null, 2));
+  writeFileSync("test/output/measure.json", JSON.stringify({ node: process.version, timings, growth, marches, sizes }, null, 2));
 }
 
 async function time(n: number): Promise<Timing> {
@@ -48,12 +59,16 @@ async function time(n: number): Promise<Timing> {
   bench.add("march", () => {
     kept = march(x, ue, 1.5e-5, null, null, {});
   });
+  bench.add("physics", () => {
+    const made = edgeCurve(stations, speed);
+    kept = made.ok ? thwaitesMarch(made.edge, 1.5e-5) : undefined;
+  });
   bench.add("floor", () => {
     kept = floor(stations, speed);
   });
   await bench.run();
   if (kept === undefined) throw new Error("nothing was calculated");
-  const [a, b] = bench.tasks.map((task) => {
+  const [a, physics, b] = bench.tasks.map((task) => {
     if (!("latency" in task.result)) throw new Error(`${task.name} did not run`);
     return task.result.latency;
   });
@@ -64,9 +79,27 @@ async function time(n: number): Promise<Timing> {
     marchMs: round(marchMs),
     perStationNs: round((1e6 * marchMs) / n),
     spreadPercent: round((100 * (a!.p75 - a!.min)) / marchMs),
+    physicsMs: round(physics!.p50),
+    physicsPerStationNs: round((1e6 * physics!.p50) / n),
     floorMs: round(floorMs),
     ratioToFloor: round(marchMs / floorMs),
   };
+}
+
+async function rivals(): Promise<{ march: string; medianMs: number; spreadPercent: number; ratio: number }[]> {
+  const x = Array.from({ length: MARCH_STATIONS }, (_, i) => [i / (MARCH_STATIONS - 1)]);
+  const ue = x.map(([s]) => [20 * (1 - 0.1 * s!)]);
+  const bench = new Bench({ time: SHORTEST_MS, warmupTime: SHORTEST_MS / 4, iterations: 3 });
+  for (const name of MARCHES) bench.add(name, () => void wallFunctions[name]!(x, ue, 1.5e-5, null, null, null, {}));
+  await bench.run();
+  const latency = bench.tasks.map((task) => {
+    if (!("latency" in task.result)) throw new Error(`${task.name} did not run`);
+    return task.result.latency;
+  });
+  return MARCHES.map((march, i) => {
+    const { p50, p75, min } = latency[i]!;
+    return { march, medianMs: round(p50), spreadPercent: round((100 * (p75 - min)) / p50), ratio: round(p50 / latency[0]!.p50) };
+  });
 }
 
 function floor(x: Float64Array, ue: Float64Array): Float64Array {
