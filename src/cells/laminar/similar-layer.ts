@@ -37,6 +37,7 @@ function scale(layer: SimilarLayer): number {
 /**
  * Solves the similar (Falkner–Skan) laminar layer of an edge speed ue ∝ x^m: wall shear, thicknesses and shape factors, also with suction or blowing and with reversed flow.
  * @customfunction SIMILAR_LAYER
+ * @requiresParameterAddresses
  * @param {any} m Exponent of the edge speed: 0 flat plate, 1 plane stagnation point, 1/3 round stagnation point (by Mangler's transformation), below 0 decelerating.
  * @param {any} [what] One quantity as a number: wall shear, friction, defect, momentum loss, energy loss, layer height, shape, energy shape, gradient, shear, dissipation, beta, wall value, wall flow, defect in eta, momentum loss in eta; omitted: all of them as a table.
  * @param {any} [branch] attached (default), or reversed: the second layer that a decelerating edge speed allows.
