@@ -1,11 +1,10 @@
-import type { Smoothed } from "../../numerics/smoothing-spline";
 import { blowVelocity } from "../../physics/coupling/blow-velocity";
+import { errorKnown, noiseWords } from "../edge/noise-words";
 import { readNoise } from "../edge/read-noise";
 import { refusalError } from "../errors/sentences";
 import { openCall } from "../reading/call";
 import { readColumn, readOptionalColumn } from "../reading/read-column";
 import { readOptionalFlag } from "../reading/read-value";
-import { formatNumber } from "../writing/format-number";
 import { spillColumn, spillTable } from "../writing/spill-table";
 
 /**
@@ -47,28 +46,12 @@ export function wallBlowVelocity(x: any[][], mass_defect: any[][], noise: any, r
   if (!made.ok) throw refusalError(call, made);
   if (!asTable) return spillColumn(made.velocity);
   const { smoothed } = made;
-  const errorKnown = smoothed.origin === "given" || smoothed.origin === "found";
+  const wall = radii === undefined ? "plane wall: dm/dx" : "round body: (1/r) d(r m)/dx";
   return spillTable(call, stations.length, [
     { key: "station", values: stations },
     { key: "mass_defect", values: smoothed.curve.value },
     { key: "blow_velocity", values: made.velocity },
-    { key: "uncertainty", values: errorKnown ? made.standardError : [] },
-    { key: "note", values: [noteOf(smoothed, radii !== undefined)] },
+    { key: "uncertainty", values: errorKnown(smoothed) ? made.standardError : [] },
+    { key: "note", values: [`${wall}; ${noiseWords(smoothed, "m")}`] },
   ]);
-}
-
-function noteOf(smoothed: Smoothed, round: boolean): string {
-  const wall = round ? "round body: (1/r) d(r m)/dx" : "plane wall: dm/dx";
-  const noise = formatNumber(smoothed.noise);
-  const freedom = `${smoothed.freedom.toFixed(1)} equivalent degrees of freedom`;
-  switch (smoothed.origin) {
-    case "found":
-      return `${wall}; noise of m found by generalised cross-validation: ${noise}; ${freedom}; ± is one standard error`;
-    case "given":
-      return `${wall}; noise of m given: ${noise}; ${freedom}; ± is one standard error`;
-    case "none given":
-      return `${wall}; noise = 0: points interpolated, ± unknown`;
-    case "none found":
-      return `${wall}; cross-validation tells no noise from the shape: points interpolated, ± unknown; give noise if the column is measured`;
-  }
 }

@@ -122,9 +122,15 @@ export const catalogue: readonly CatalogueEntry[] = [
         "description": "Standard deviation of the noise of one value; omitted or \"found\": found by cross-validation; 0: the spline through all points.",
         "unit": "unit of v",
         "optional": true
+      },
+      {
+        "name": "report",
+        "description": "TRUE: a table with headings (station, value, ± standard error, note naming the noise found); omitted: the values alone.",
+        "unit": "TRUE or FALSE",
+        "optional": true
       }
     ],
-    "gives": "Gradient dv/dx at the stations, one entry a row.",
+    "gives": "Gradient dv/dx at the stations, one entry a row; or the table.",
     "resultUnit": "unit of v / unit of x",
     "limits": [
       "At least 6 points where the noise is to be found, 3 where it is given, 2 for noise 0. Noise 0 reproduces the gradient of any cubic; its error falls with the third power of the spacing.",
@@ -220,9 +226,15 @@ export const catalogue: readonly CatalogueEntry[] = [
         "description": "Standard deviation of the noise of one value; omitted or \"found\": found by cross-validation; 0: nothing is smoothed.",
         "unit": "unit of v",
         "optional": true
+      },
+      {
+        "name": "report",
+        "description": "TRUE: a table with headings (station, value, ± standard error, note naming the noise found); omitted: the values alone.",
+        "unit": "TRUE or FALSE",
+        "optional": true
       }
     ],
-    "gives": "Smoothed values, one entry a row.",
+    "gives": "Smoothed values, one entry a row; or the table.",
     "resultUnit": "unit of v",
     "limits": [
       "At least 6 points where the noise is to be found, 3 where it is given. The noise is taken as equal and independent at all points.",

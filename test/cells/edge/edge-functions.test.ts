@@ -30,14 +30,14 @@ describe("SMOOTH_COLUMN and GRADIENT_OF", () => {
   test("with noise 0 give the values back and the gradient of a cubic exactly", () => {
     const x = column(0, 0.5, 1.5, 2, 3);
     const v = x.map(([at]) => [(at as number) ** 3]);
-    expect(smoothColumn(range(x), v, 0, none)).toEqual(v);
-    gradientOf(range(x), v, 0, none).forEach(([slope], i) => expect(slope).toBeCloseTo(3 * (x[i]![0] as number) ** 2, 12));
+    expect(smoothColumn(range(x), v, 0, null, none)).toEqual(v);
+    gradientOf(range(x), v, 0, null, none).forEach(([slope], i) => expect(slope).toBeCloseTo(3 * (x[i]![0] as number) ** 2, 12));
   });
   test('take "found" and a blank alike', () => {
     const x = column(...Array.from({ length: 30 }, (_, i) => i / 10));
     const v = x.map(([at], i) => [Math.sin(at as number) + (i % 3 === 0 ? 0.02 : -0.01)]);
-    expect(smoothColumn(range(x), v, "Found", none)).toEqual(smoothColumn(range(x), v, null, none));
-    expect(smoothColumn(range(x), v, null, none)).not.toEqual(v);
+    expect(smoothColumn(range(x), v, "Found", null, none)).toEqual(smoothColumn(range(x), v, null, null, none));
+    expect(smoothColumn(range(x), v, null, null, none)).not.toEqual(v);
   });
   test.each<[unknown[][], unknown[][], unknown, string]>([
     [column(0, 1, 1), column(1, 2, 3), 0, "GRADIENT_OF needs rising x; row 3 repeats 1"],
@@ -48,7 +48,7 @@ describe("SMOOTH_COLUMN and GRADIENT_OF", () => {
     [column(0, 1, 2), column(1, 2, 3), true, 'GRADIENT_OF needs noise as a number or "found"; it has TRUE'],
     [column(0, 1, 2), column(1e308, -1e308, 1e308), 0, "GRADIENT_OF needs finite numbers in v; row 1"],
   ])("refuse %j, %j, %j with a sentence", (x, v, noise, sentence) => {
-    expect(() => gradientOf(range(x), range(v), noise, none)).toThrow(sentence);
+    expect(() => gradientOf(range(x), range(v), noise, null, none)).toThrow(sentence);
   });
   test("give finite numbers or a sentence for any finite columns", () => {
     fc.assert(
@@ -57,7 +57,7 @@ describe("SMOOTH_COLUMN and GRADIENT_OF", () => {
         const x = rows.map(([h]) => [(sum += h)]);
         const v = rows.map(([, value]) => [value]);
         try {
-          for (const cell of gradientOf(x, v, noise, none).flat()) expect(Number.isFinite(cell)).toBe(true);
+          for (const cell of gradientOf(x, v, noise, null, none).flat()) expect(Number.isFinite(cell)).toBe(true);
         } catch (error) {
           expect((error as Error).message).toMatch(/^GRADIENT_OF needs /);
         }
