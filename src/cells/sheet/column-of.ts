@@ -26,7 +26,7 @@ import type { Cell } from "../writing/spill-table";
 export function columnOf(table: any[][], heading: any, invocation: CustomFunctions.Invocation): any[][] {
   const call = openCall("COLUMN_OF", invocation);
   const rows = cellRows(table);
-  if (rows === undefined || rows.length < 2) throw cellError("#VALUE!", `${call.name} needs a table with a heading row and at least one row below it`);
+  if (rows === undefined || rows.length < 2) throw cellError("#VALUE!", `${call.name} needs a table with a heading row and at least one row below it; ${rows?.length ?? 0} rows given`);
   const wanted = readOptionalText(call, "heading", heading);
   if (wanted === undefined) throw cellError("#VALUE!", `${call.name} needs heading; it is missing or blank`);
   const heads = rows[0]!.map((cell) => {
