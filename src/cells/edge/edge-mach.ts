@@ -10,7 +10,7 @@ import { spillColumn } from "../writing/spill-table";
  * @customfunction EDGE_MACH
  * @requiresParameterAddresses
  * @param {any[][]} cp Pressure coefficients, referred to the reference flow.
- * @param {any} mach Mach number of the reference flow, above 0.
+ * @param {any} mach Mach number of the reference flow, above 0 and not above 100.
  * @param {any} [gamma] Ratio of specific heats; default 1.4.
  * @param {CustomFunctions.Invocation} invocation Filled in by the host.
  * @returns {any[][]} Local Mach number, one entry a row; 0 at the stagnation value of cp.

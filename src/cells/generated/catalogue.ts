@@ -15,7 +15,7 @@ export const catalogue: readonly CatalogueEntry[] = [
       },
       {
         "name": "mach",
-        "description": "Mach number of the reference flow, above 0.",
+        "description": "Mach number of the reference flow, above 0 and not above 100.",
         "unit": "1",
         "optional": false
       },

@@ -1,6 +1,6 @@
 import { checkFinite } from "../../numerics/check-column";
 import { refuse, type Outcome } from "../../numerics/outcome";
-import { GAMMA_OF_AIR } from "./edge-speed";
+import { GAMMA_OF_AIR, MOST_MACH } from "./edge-speed";
 
 /** A pressure coefficient this close above its stagnation value, relative, is rounding of the stagnation point itself. */
 const ROUNDING = 1e-12;
@@ -10,7 +10,7 @@ const ROUNDING = 1e-12;
  * M² = 2∕(γ−1) ((p0∕p)^((γ−1)∕γ) − 1), with p∕p∞ = 1 + γM∞²cp∕2 and p0∕p∞ from the reference Mach number.
  *
  * @param cp pressure coefficients [1], from above the vacuum value −2∕(γM∞²) to the stagnation value
- * @param mach reference Mach number, > 0
+ * @param mach reference Mach number, > 0, ≤ 100
  * @param gamma ratio of specific heats, > 1
  * @returns Mach number at each place; a value outside is refused with its row
  *
@@ -19,6 +19,7 @@ const ROUNDING = 1e-12;
 export function edgeMach(cp: Float64Array, mach: number, gamma = GAMMA_OF_AIR): Outcome<{ mach: Float64Array }> {
   if (cp.length < 1) return refuse("too few points", { argument: "cp", values: { count: 0, least: 1 } });
   if (!(Number.isFinite(mach) && mach > 0)) return refuse("not positive", { argument: "mach", values: { value: mach } });
+  if (mach > MOST_MACH) return refuse("outside range", { argument: "mach", values: { value: mach, least: 0, most: MOST_MACH } });
   if (!(Number.isFinite(gamma) && gamma > 1)) return refuse("outside range", { argument: "gamma", values: { value: gamma, least: 1, most: Infinity } });
   const bad = checkFinite(cp, "cp");
   if (bad) return bad;

@@ -4,6 +4,8 @@ import { refuse } from "../../numerics/outcome";
 
 /** Ratio of specific heats of air at moderate temperature (NACA Rep. 1135, 1953, p. 1). */
 export const GAMMA_OF_AIR = 1.4;
+/** Perfect-gas relations mean nothing long before this Mach number, and overflow long after it. */
+export const MOST_MACH = 100;
 /** Below this Mach number the isentropic relation differs from Bernoulli's by less than rounding (M²/4). */
 const INCOMPRESSIBLE = 1e-8;
 /** A pressure coefficient this close above its stagnation value, relative, is rounding of the stagnation point itself. */
@@ -18,7 +20,7 @@ const ROUNDING = 1e-12;
  * @param cp pressure coefficients [1], n ≥ 1, not above the stagnation value (1, or 1 + M²∕4 + … with a Mach number) and not below
  *   the vacuum value −2∕(γM²); outside: refused with the row
  * @param referenceSpeed U [speed], > 0
- * @param mach Mach number of the reference flow [1], ≥ 0; omitted or 0: Bernoulli. No shock may stand between reference and wall
+ * @param mach Mach number of the reference flow [1], 0 … 100; omitted or 0: Bernoulli. No shock may stand between reference and wall
  * @param gamma ratio of specific heats [1], > 1
  * @returns edge speed at each place [speed]
  *
@@ -63,6 +65,7 @@ function checkReference(referenceSpeed: number, mach: number, gamma: number): Re
   }
   if (!Number.isFinite(mach)) return refuse("not finite", { argument: "mach" });
   if (mach < 0) return refuse("negative", { argument: "mach", values: { value: mach } });
+  if (mach > MOST_MACH) return refuse("outside range", { argument: "mach", values: { value: mach, least: 0, most: MOST_MACH } });
   if (!(Number.isFinite(gamma) && gamma > 1)) return refuse("outside range", { argument: "gamma", values: { value: gamma, least: 1, most: Infinity } });
   return null;
 }

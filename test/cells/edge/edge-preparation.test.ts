@@ -47,6 +47,8 @@ test.each<[string, unknown[], string]>([
   ["SURFACE_LENGTH", [column(0), column(0)], "needs at least 2 numbers in x; 1 given"],
   ["SURFACE_LENGTH", [column(0, 1), column(0, "b")], 'needs numbers in y; row 2 (B3) holds the text "b"'],
   ["EDGE_MACH", [column(0, 1.2), 0.5, null], "needs cp between -5.71429 and 1.06407; row 2 (A3) has 1.2"],
+  ["EDGE_MACH", [column(0), 1e308, null], "needs mach between 0 and 100; it has 1e+308"], // found by 130 000 random calls: it said "cp between 0 and NaN"
+  ["EDGE_SPEED", [column(0), 10, 1e200], "needs mach between 0 and 100; it has 1e+200"],
   ["EDGE_MACH", [column(0), 0, null], "needs mach above 0; it has 0"],
   ["EDGE_MACH", [column(0), 0.5, 0.9], "needs gamma of at least 1; it has 0.9"],
   ["RESTATION", [column(0, 1, 2), column(0, 1, 4), column(1, 2.5), null], "needs new_x inside the column, 0 to 2; row 2 (C3) asks for 2.5, and nothing is extrapolated"],
