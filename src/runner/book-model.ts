@@ -1,8 +1,9 @@
 import type { Engine, EngineModel } from "../engine/types";
-import { cellBox, cellPlace } from "../workbook/cell-reference";
+import { boxSize, cellBox, cellPlace, columnLetters, type CellBox } from "../workbook/cell-reference";
 import { cellsOf } from "../workbook/patch-sheet";
 import { formulaReader, sharedFormulaAt } from "../workbook/plain-formula";
 import type { StoredCell, StoredValue } from "../workbook/read-sheet";
+import { WorkbookError } from "../workbook/workbook-error";
 import type { BookSheet, Workbook } from "../workbook/read-workbook";
 import { callsWall, leftJudge, type Left } from "./why-left";
 
@@ -30,9 +31,12 @@ export interface BookModel {
   sheets: ModelSheet[];
 }
 
-/** Room below and beside the used part for spills; a spill is as long as its inputs, which lie in the used part. */
+/** Room below and beside the used part for spills, besides their inputs' length. */
 const SPARE_ROWS = 1_000;
 const SPARE_COLUMNS = 60;
+/** The engine takes some 40 µs a row and 1 ms a column of a sheet, used or not (measured): what lies beyond would take minutes. */
+const MOST_ROWS = 400_000;
+const MOST_COLUMNS = 4_000;
 /** The engine's format code for cells whose content is text whatever it looks like. */
 const TEXT_FORMAT = 1;
 
@@ -49,19 +53,34 @@ export function bookModel(engine: Engine, book: Workbook): BookModel {
     for (const cell of sheet.cells.values()) if (cell.formula?.kind === "shared" && cell.formula.text !== "") shared.set(cell.formula.shared ?? "", cell);
     for (const cell of sheet.cells.values()) {
       if (!cell.formula) continue;
-      const text = formulaText(cell, shared);
+      const text = cell.formula.kind === "dataTable" ? "" : formulaText(cell, shared);
       if (text === undefined) continue;
       const plain = read(text, sheet.name, cellPlace(cell.reference));
       const left = whyLeft(cell, plain);
       formulas.set(cell.reference, { cell, text: plain.text, callsWall: callsWall(plain), ...(left === undefined ? {} : { left }) });
     }
-    for (const { cell, left } of formulas.values()) {
-      if (cell.formula?.kind !== "array" || cell.formula.ref === undefined || left !== undefined) continue;
-      for (const reference of cellsOf(cellBox(cell.formula.ref))) if (reference !== cell.reference && !formulas.has(reference)) spilled.set(reference, cell.reference);
+    for (const { cell } of formulas.values()) {
+      if (cell.formula?.kind !== "array" || cell.formula.ref === undefined) continue;
+      for (const reference of storedIn(cellBox(cell.formula.ref), sheet.cells)) if (reference !== cell.reference && !formulas.has(reference)) spilled.set(reference, cell.reference);
     }
     return { sheet, id: alias(sheet.name), formulas, spilled };
   });
   return { model: modelOf(engine, sheets, new Set()), sheets };
+}
+
+/** A cell that holds part of the result of an array formula which is calculated anew, and so no value of its own. */
+export function isSpilled({ formulas, spilled }: Pick<ModelSheet, "formulas" | "spilled">, reference: string): boolean {
+  const source = spilled.get(reference);
+  return source !== undefined && formulas.get(source)?.left === undefined;
+}
+
+/** The stored cells of a block, found the shorter way: a hostile file may claim a block of the whole sheet. */
+function storedIn(box: CellBox, cells: ReadonlyMap<string, StoredCell>): string[] {
+  if (boxSize(box) <= cells.size) return cellsOf(box).filter((reference) => cells.has(reference));
+  return [...cells.keys()].filter((reference) => {
+    const { row, column } = cellPlace(reference);
+    return row >= box.top && row <= box.bottom && column >= box.left && column <= box.right;
+  });
 }
 
 /** The engine's model; formulas named in `single` give their first value only, as an old workbook's plain cells do. */
@@ -73,14 +92,9 @@ export function modelOf(engine: Engine, sheets: readonly ModelSheet[], single: R
     sheets: sheets.map(({ sheet, id, formulas, spilled }) => {
       const cells: Record<string, string> = {};
       const formats: Record<string, number> = {};
-      let rows = 1;
-      let columns = 1;
       for (const cell of sheet.cells.values()) {
         const { reference } = cell;
-        const place = cellPlace(reference);
-        rows = Math.max(rows, place.row);
-        columns = Math.max(columns, place.column);
-        if (spilled.has(reference)) continue;
+        if (isSpilled({ formulas, spilled }, reference)) continue;
         const formula = formulas.get(reference);
         if (formula && formula.left === undefined) cells[reference] = single.has(`${id}!${reference}`) ? `=SINGLE(${formula.text.slice(1)})` : formula.text;
         else {
@@ -90,9 +104,26 @@ export function modelOf(engine: Engine, sheets: readonly ModelSheet[], single: R
           if (typeof cell.value === "string" && content === cell.value) formats[reference] = TEXT_FORMAT;
         }
       }
-      return { id, name: id, rowNumber: 2 * rows + SPARE_ROWS, colNumber: columns + SPARE_COLUMNS, cells, formats };
+      return { id, name: id, ...gridSize(sheet.name, cells, sheet.cells), cells, formats };
     }),
   });
+}
+
+/** The grid holds the used cells and, below the lowest array formula, as many rows again: a spill is as long as its inputs. */
+function gridSize(sheet: string, used: Record<string, string>, stored: ReadonlyMap<string, StoredCell>): { rowNumber: number; colNumber: number } {
+  let rows = 1;
+  let columns = 1;
+  let lowestArray = 0;
+  for (const reference in used) {
+    const { row, column } = cellPlace(reference);
+    rows = Math.max(rows, row);
+    columns = Math.max(columns, column);
+    if (stored.get(reference)?.formula?.kind === "array") lowestArray = Math.max(lowestArray, row);
+  }
+  if (rows > MOST_ROWS || columns > MOST_COLUMNS) {
+    throw new WorkbookError(`The sheet ${sheet} is used as far as row ${rows} and column ${columnLetters(columns)}; sheets of more than ${MOST_ROWS} rows or ${MOST_COLUMNS} columns are not calculated here.`);
+  }
+  return { rowNumber: lowestArray + rows + SPARE_ROWS, colNumber: columns + SPARE_COLUMNS };
 }
 
 function formulaText(cell: StoredCell, shared: ReadonlyMap<string, StoredCell>): string | undefined {

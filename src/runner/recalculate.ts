@@ -6,7 +6,7 @@ import { cellsOf, patchSheet, type CellEdit } from "../workbook/patch-sheet";
 import type { StoredValue } from "../workbook/read-sheet";
 import { readWorkbook } from "../workbook/read-workbook";
 import { writePackage } from "../workbook/write-package";
-import { bookModel, modelOf, type ModelFormula, type ModelSheet } from "./book-model";
+import { bookModel, isSpilled, modelOf, type ModelFormula, type ModelSheet } from "./book-model";
 
 /** One thing a recalculation has to say about a cell. */
 export interface RecalcNote {
@@ -114,7 +114,7 @@ function editsOf(model: EngineModel, part: ModelSheet, notes: RecalcNote[], coun
       put(name, inside ? (valueAt(model, id, name) ?? 0) : { error: "#N/A" });
     }
   }
-  for (const name of spilled.keys()) if (!alive.has(name) && !edits.has(name)) put(name, null);
+  for (const name of spilled.keys()) if (isSpilled(part, name) && !alive.has(name) && !edits.has(name)) put(name, null);
   return edits;
 }
 

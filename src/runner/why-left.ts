@@ -1,4 +1,5 @@
 import type { Engine } from "../engine/types";
+import { boxSize, cellBox } from "../workbook/cell-reference";
 import type { StoredCell } from "../workbook/read-sheet";
 import type { PlainFormula } from "../workbook/plain-formula";
 
@@ -9,6 +10,8 @@ export interface Left {
   byItself: boolean;
 }
 
+/** Cells a fixed array block may have: all of them are written, and more than this no one has filled on purpose. */
+const LARGEST_BLOCK = 2_000_000;
 /** Their value hangs on the moment or on chance. */
 const CHANGING = new Set(["NOW", "TODAY", "RAND", "RANDBETWEEN", "RANDARRAY"]);
 /** The sheet engine counts days from 1900 only. */
@@ -23,6 +26,8 @@ export function leftJudge(engine: Engine, from1904: boolean): (cell: StoredCell,
   return (cell, formula) => {
     const uses = (what: string) => ({ reason: `it uses ${what}`, byItself: false });
     if (cell.formula?.kind === "dataTable") return uses("a what-if table");
+    const block = cell.formula?.kind === "array" && cell.attributes["cm"] === undefined && cell.formula.ref !== undefined ? boxSize(cellBox(cell.formula.ref)) : 0;
+    if (block > LARGEST_BLOCK) return { reason: `its fixed block has ${block} cells, more than ${LARGEST_BLOCK}`, byItself: false };
     if (formula.outside) return uses("a link to another book");
     const unknown = formula.functions.find((f) => !known.has(f));
     if (unknown !== undefined) return uses(`the function ${unknown.replace(/^_XLDUDF_/, "")}, unknown here`);

@@ -1,3 +1,9 @@
+import { WorkbookError } from "./workbook-error";
+
+/** Rows and columns of a sheet (ECMA-376 names none; every program of the trade keeps to these). */
+const MOST_ROWS = 1_048_576;
+const MOST_COLUMNS = 16_384;
+
 /** A cell, column and row counted from 1. */
 export interface CellPlace {
   column: number;
@@ -15,8 +21,9 @@ export interface CellBox {
 /** `$B$12` → column 2, row 12. */
 export function cellPlace(reference: string): CellPlace {
   const m = /^\$?([A-Z]{1,3})\$?([0-9]{1,7})$/i.exec(reference);
-  if (!m) throw new Error(`"${reference}" is not a cell reference.`);
-  return { column: columnNumber(m[1]!), row: Number(m[2]) };
+  const place = m && { column: columnNumber(m[1]!), row: Number(m[2]) };
+  if (!place || place.column > MOST_COLUMNS || place.row < 1 || place.row > MOST_ROWS) throw new WorkbookError(`The file is damaged: "${reference.slice(0, 30)}" stands in it as the address of a cell.`);
+  return place;
 }
 
 /** `A1:C4` or `B2` → its block. */
@@ -39,6 +46,11 @@ export function cellName(column: number, row: number): string {
 export function boxName(box: CellBox): string {
   const first = cellName(box.left, box.top);
   return box.left === box.right && box.top === box.bottom ? first : `${first}:${cellName(box.right, box.bottom)}`;
+}
+
+/** Number of cells in a block. */
+export function boxSize(box: CellBox): number {
+  return (box.right - box.left + 1) * (box.bottom - box.top + 1);
 }
 
 /** 1 → A, 27 → AA. */

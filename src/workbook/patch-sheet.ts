@@ -84,13 +84,15 @@ function addCells(xml: string, cells: ReadonlyMap<string, StoredCell>, added: Ma
     standing.set(row, list);
   }
   const newRows: string[] = [];
+  let next = 0;
   for (const [number, list] of [...added].sort((a, b) => a[0] - b[0])) {
     list.sort((a, b) => a.column - b.column);
-    const row = rows.find((r) => r.number === number);
+    while (next < rows.length && rows[next]!.number < number) next++; // rows stand in order
+    const row = rows[next]?.number === number ? rows[next] : undefined;
     const inside = list.map((c) => c.text).join("");
     if (!row) {
       const text = `<${prefix}row r="${number}">${inside}</${prefix}row>`;
-      const after = rows.find((r) => r.number > number);
+      const after = rows[next];
       if (empty) newRows.push(text);
       else cuts.push({ at: after?.at ?? dataEnd, length: 0, text });
       continue;
@@ -112,9 +114,9 @@ function addCells(xml: string, cells: ReadonlyMap<string, StoredCell>, added: Ma
 
 function rowsOf(xml: string): { number: number; at: number; tag: string; isEmpty: boolean }[] {
   let number = 0;
-  return [...xml.matchAll(/<(?:[\w.-]+:)?row(?=[\s/>])((?:"[^"]*"|'[^']*'|[^>"'])*?)(\/?)>/g)].map((m) => {
+  return [...xml.matchAll(/<(?:[\w.-]+:)?row(?=[\s/>])((?:[^<>"']|"[^"<]*"|'[^'<]*')*)>/g)].map((m) => {
     number = Number(attributes(m[1]!)["r"] ?? number + 1);
-    return { number, at: m.index, tag: m[0], isEmpty: m[2] === "/" };
+    return { number, at: m.index, tag: m[0], isEmpty: m[1]!.endsWith("/") };
   });
 }
 

@@ -1,4 +1,6 @@
-import { attributes, elements, plainText, plainXml } from "./xml-text";
+import { cellName, cellPlace } from "./cell-reference";
+import { WorkbookError } from "./workbook-error";
+import { elements, plainText, plainXml, scanElements, type XmlElement } from "./xml-text";
 
 /** What a cell's value is in the file. */
 export type StoredValue = number | string | boolean | null | { error: string };
@@ -24,8 +26,7 @@ export interface StoredCell {
   length: number;
 }
 
-const CELL = /<(?:[\w.-]+:)?c(?=[\s/>])((?:"[^"]*"|'[^']*'|[^>"'])*?)(?:\/>|>([\s\S]*?)<\/(?:[\w.-]+:)?c\s*>)/g;
-const ROW_OR_CELL = /<(?:[\w.-]+:)?row(?=[\s/>])((?:"[^"]*"|'[^']*'|[^>"'])*)>/g;
+const ROW = /<(?:[\w.-]+:)?row(?=[\s/>])((?:[^<>"']|"[^"<]*"|'[^'<]*')*)>/g;
 
 /** Reads the cells of a sheet part. Cells without an address (allowed by the standard) are given theirs by counting. */
 export function readSheet(xml: string, strings: readonly string[]): Map<string, StoredCell> {
@@ -37,32 +38,30 @@ export function readSheet(xml: string, strings: readonly string[]): Map<string, 
   let row = 0;
   let column = 0;
   let next = 0;
-  CELL.lastIndex = begin;
-  for (let m = CELL.exec(xml); m && m.index < end; m = CELL.exec(xml)) {
-    while (next < rows.length && rows[next]!.at < m.index) {
+  for (const element of scanElements(xml, "c", begin, end)) {
+    while (next < rows.length && rows[next]!.at < element.at) {
       row = rows[next]!.number ?? row + 1;
       column = 0;
       next++;
     }
-    const a = attributes(m[1]!);
-    const reference = a["r"] ?? letters(column + 1) + row;
-    column = columnOf(reference);
-    cells.set(reference, { reference, attributes: a, ...content(a["t"], m[2] ?? "", strings), at: m.index, length: m[0].length });
+    const reference = element.attributes["r"] ?? cellName(column + 1, row);
+    column = cellPlace(reference).column;
+    cells.set(reference, { reference, attributes: element.attributes, ...content(reference, element, strings), at: element.at, length: element.length });
   }
   return cells;
 }
 
 function rowStarts(xml: string, begin: number, end: number): { at: number; number: number | undefined }[] {
   const rows: { at: number; number: number | undefined }[] = [];
-  ROW_OR_CELL.lastIndex = begin;
-  for (let m = ROW_OR_CELL.exec(xml); m && m.index < end; m = ROW_OR_CELL.exec(xml)) {
+  ROW.lastIndex = begin;
+  for (let m = ROW.exec(xml); m && m.index < end; m = ROW.exec(xml)) {
     const r = /\sr="(\d+)"/.exec(m[1]!)?.[1];
     rows.push({ at: m.index, number: r === undefined ? undefined : Number(r) });
   }
   return rows;
 }
 
-function content(type: string | undefined, inside: string, strings: readonly string[]): Pick<StoredCell, "formula" | "value"> {
+function content(reference: string, { attributes: { t: type }, inside }: XmlElement, strings: readonly string[]): Pick<StoredCell, "formula" | "value"> {
   const f = elements(inside, "f")[0];
   const v = elements(inside, "v")[0]?.inside;
   const formula: StoredFormula | undefined = f && {
@@ -71,10 +70,10 @@ function content(type: string | undefined, inside: string, strings: readonly str
     ...(f.attributes["ref"] === undefined ? {} : { ref: f.attributes["ref"] }),
     ...(f.attributes["si"] === undefined ? {} : { shared: f.attributes["si"] }),
   };
-  return { ...(formula ? { formula } : {}), value: valueOf(type, inside, v, strings) };
+  return { ...(formula ? { formula } : {}), value: valueOf(reference, type, inside, v, strings) };
 }
 
-function valueOf(type: string | undefined, inside: string, v: string | undefined, strings: readonly string[]): StoredValue {
+function valueOf(reference: string, type: string | undefined, inside: string, v: string | undefined, strings: readonly string[]): StoredValue {
   if (type === "inlineStr") return richText(elements(inside, "is")[0]?.inside ?? "");
   if (v === undefined) return null;
   switch (type) {
@@ -88,7 +87,7 @@ function valueOf(type: string | undefined, inside: string, v: string | undefined
     case "d":
       return plainText(v);
     default:
-      return Number(v);
+      return v.trim() === "" ? null : numberOf(reference, v);
   }
 }
 
@@ -98,15 +97,8 @@ export function richText(inside: string): string {
   return elements(bare, "t").map((t) => plainText(t.inside)).join("");
 }
 
-function letters(column: number): string {
-  return column < 1 ? "" : letters(Math.floor((column - 1) / 26)) + String.fromCharCode(65 + ((column - 1) % 26));
-}
-
-function columnOf(reference: string): number {
-  let n = 0;
-  for (const c of reference) {
-    if (c >= "0" && c <= "9") break;
-    n = n * 26 + c.toUpperCase().charCodeAt(0) - 64;
-  }
-  return n;
+function numberOf(reference: string, text: string): number {
+  const value = Number(text);
+  if (!Number.isFinite(value)) throw new WorkbookError(`The file is damaged: its cell ${reference} holds "${text.slice(0, 30)}" where a number should stand.`);
+  return value;
 }

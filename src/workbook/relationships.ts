@@ -27,5 +27,5 @@ function resolved(folder: string, target: string): string {
     if (step === "..") steps.pop();
     else if (step !== "." && step !== "") steps.push(step);
   }
-  return decodeURIComponent(steps.join("/"));
+  return steps.join("/").replace(/%([0-7][0-9a-f])/gi, (_whole, hex: string) => String.fromCharCode(parseInt(hex, 16)));
 }

@@ -1,5 +1,9 @@
 /** Text and attributes of the XML parts of a workbook; parts with a document type are refused before they come here. */
 
+import { WorkbookError } from "./workbook-error";
+
+/** White space that may stand in an end tag; nobody writes more. */
+const LONGEST_GAP = 16;
 const ENTITIES: Readonly<Record<string, string>> = { lt: "<", gt: ">", amp: "&", quot: '"', apos: "'" };
 
 /** Text content → characters, the workbook's own `_x000D_` escapes included. */
@@ -40,8 +44,29 @@ export interface XmlElement {
   length: number;
 }
 
+/** The inside of a start tag; `<` stands in no attribute, so that a tag never closed is found out at once. */
+const TAG_INSIDE = `((?:[^<>"']|"[^"<]*"|'[^'<]*')*)`;
+
 /** All elements of a name, with any prefix; elements of one name must not be nested in each other. */
 export function elements(xml: string, name: string): XmlElement[] {
-  const pattern = new RegExp(`<(?:[\\w.-]+:)?${name}(?=[\\s/>])((?:"[^"]*"|'[^']*'|[^>"'])*?)(?:/>|>([\\s\\S]*?)</(?:[\\w.-]+:)?${name}\\s*>)`, "g");
-  return [...xml.matchAll(pattern)].map((m) => ({ attributes: attributes(m[1]!), inside: m[2] ?? "", at: m.index, length: m[0].length }));
+  return [...scanElements(xml, name, 0, xml.length)];
+}
+
+/** The elements of a name that begin between two places of a part, one after the other in time that grows with the part's length only. */
+export function* scanElements(xml: string, name: string, from: number, to: number): Generator<XmlElement> {
+  const start = new RegExp(`<([\\w.-]+:)?${name}(?=[\\s/>])${TAG_INSIDE}>`, "g");
+  start.lastIndex = from;
+  for (let m = start.exec(xml); m && m.index < to; m = start.exec(xml)) {
+    const isEmpty = m[2]!.endsWith("/");
+    const begin = start.lastIndex;
+    const end = isEmpty ? begin : endTag(xml, `</${m[1] ?? ""}${name}`, begin);
+    const after = isEmpty ? begin : xml.indexOf(">", end) + 1;
+    yield { attributes: attributes(m[2]!), inside: xml.slice(begin, end), at: m.index, length: after - m.index };
+    start.lastIndex = after;
+  }
+}
+
+function endTag(xml: string, tag: string, from: number): number {
+  for (let at = xml.indexOf(tag, from); at >= 0; at = xml.indexOf(tag, at + tag.length)) if (/^\s*>/.test(xml.slice(at + tag.length, at + tag.length + LONGEST_GAP))) return at;
+  throw new WorkbookError(`The file is damaged: ${tag.replace("</", "<")}> is opened in it and never closed.`);
 }

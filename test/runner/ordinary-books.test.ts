@@ -25,6 +25,13 @@ async function read(bytes: Uint8Array): Promise<(cell: string, sheet?: string) =
   };
 }
 
+/** A book of one sheet with these rows. */
+function withRows(rows: string): Uint8Array {
+  const parts = unzipSync(byHand([]));
+  parts[SHEET] = strToU8(`<worksheet><sheetData>${rows}</sheetData></worksheet>`);
+  return zipSync(parts);
+}
+
 /** Column A holds formulas with the value 5 stored; H1:H3 hold 3, 4, 5. */
 function byHand(formulas: readonly string[], settings = "", more = ""): Uint8Array {
   const xml = (text: string) => text.replace(/&/g, "&amp;").replace(/</g, "&lt;");
@@ -154,4 +161,48 @@ describe("formulas and texts as files hold them", () => {
     const texts = ["=1+1", "1e5", "TRUE"].map((text, i) => `<c r="${"IJK"[i]}1" t="inlineStr"><is><t>${text}</t></is></c>`).join("");
     expect(storedCell(recalculate(engine, byHand([formula], "", texts)).bytes, "A1")).toContain(value);
   });
+});
+
+describe("array formulas that are left alone", () => {
+  const block = (formula: string, ref: string) => `<row r="1"><c r="A1" cm="1"><f t="array" ref="${ref}">${formula}</f><v>1</v></c><c r="B1"><f>SUM(A1:A3)</f><v>0</v></c></row><row r="2"><c r="A2"><v>2</v></c></row><row r="3"><c r="A3"><v>3</v></c></row>`;
+
+  it.each(["_xlfn.FUTURE.THING(H1)", "SUM((H1,H2))"])("%s keeps its whole spilled block, which others go on reading", (formula) => {
+    const { bytes, notes } = recalculate(engine, withRows(block(formula, "A1:A3")));
+    expect(notes.map((n) => n.kind)).toEqual(["left"]);
+    expect(strFromU8(unzipSync(bytes)[SHEET]!)).toBe(`<worksheet><sheetData>${block(formula, "A1:A3").replace("<v>0</v>", "<v>6</v>")}</sheetData></worksheet>`);
+  });
+
+  it("a fixed block larger than the result shows #N/A in the rest", () => {
+    const { bytes } = recalculate(engine, withRows('<row r="1"><c r="A1"><f t="array" ref="A1:A3">_xldudf_WALL_EDGE_SPEED({1;0},10)</f><v>9</v></c></row>'));
+    expect(strFromU8(unzipSync(bytes)[SHEET]!)).toContain('<v>0</v></c></row><row r="2"><c r="A2"><v>10</v></c></row><row r="3"><c r="A3" t="e"><v>#N/A</v></c></row>');
+  });
+
+  it("a what-if table keeps its values", () => {
+    const { notes } = recalculate(engine, withRows('<row r="1"><c r="A1"><f t="dataTable" ref="A1:A2" dt2D="0" r1="B1"/><v>9</v></c></row>'));
+    expect(notes).toEqual([{ sheet: "S", cell: "A1", kind: "left", text: expect.stringContaining("a what-if table") }]);
+  });
+});
+
+describe("files made to exhaust or to mislead", () => {
+  const within = 5_000; // ms; each of these ran for minutes or fell over before it was bounded
+  it.each<[string, string, RegExp]>([
+    ["an address that is none", '<row r="1"><c r="$$"><v>1</v></c></row>', /"\$\$" stands in it as the address/],
+    ["an array block with an impossible address", '<row r="1"><c r="A1"><f t="array" ref="A1:ZZZZ99">1</f></c></row>', /"ZZZZ99"/],
+    ["a value far out", '<row r="1048576"><c r="A1048576"><v>1</v></c><c r="B1048576"><f>A1048576</f></c></row>', /more than 400000 rows/],
+    ["a cell never closed, many times", "<row><c><v>1</v></row>".repeat(20_000), /never closed/],
+    ["tags never ended", '<c "'.repeat(40_000) + "<c>", /never closed/],
+    ["text where a number should stand", '<row r="1"><c r="E1"><v>abc</v></c></row>', /cell E1 holds "abc"/],
+  ])("%s: one sentence", (_what, rows, sentence) => {
+    expect(() => recalculate(engine, withRows(rows))).toThrow(sentence);
+  }, within);
+
+  it("a fixed block of the whole sheet is left alone", () => {
+    const { notes } = recalculate(engine, withRows('<row r="1"><c r="A1"><f t="array" ref="A1:XFD1048576">1+1</f><v>0</v></c></row>'));
+    expect(notes[0]?.text).toMatch(/17179869184 cells/);
+  }, within);
+
+  it("formulas 10 000 brackets deep are left alone", () => {
+    const deep = ["(".repeat(10_000) + "1" + ")".repeat(10_000), "-".repeat(10_000) + "1", "ABS(".repeat(10_000) + "1" + ")".repeat(10_000)];
+    expect(recalculate(engine, byHand(deep)).notes.map((n) => n.kind)).toEqual(["left", "left", "left"]);
+  }, within);
 });

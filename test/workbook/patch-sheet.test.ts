@@ -1,3 +1,5 @@
+import fc from "fast-check";
+import { cellName } from "../../src/workbook/cell-reference";
 import { patchSheet, type CellEdit } from "../../src/workbook/patch-sheet";
 import { readSheet } from "../../src/workbook/read-sheet";
 
@@ -46,3 +48,37 @@ test("an empty sheet and prefixed elements are filled in their own way", () => {
   expect(patched("<sheetData/>", { A2: { value: 1 } })).toContain('<sheetData><row r="2"><c r="A2"><v>1</v></c></row></sheetData>');
   expect(patched('<x:sheetData><x:row r="1"></x:row></x:sheetData>', { A1: { value: 1 } })).toContain('<x:row r="1"><x:c r="A1"><x:v>1</x:v></x:c></x:row>');
 });
+
+test("any edits: read again, edited cells hold the new values, all others their bytes, and rows and cells stand in order", () => {
+  const place = fc.tuple(fc.integer({ min: 1, max: 30 }), fc.integer({ min: 1, max: 12 })).map(([c, r]) => cellName(c, r));
+  const value = fc.oneof(fc.double({ noNaN: true, noDefaultInfinity: true }).map((v) => v + 0), fc.boolean(), fc.string({ unit: "binary", minLength: 1 }), fc.constant({ error: "#N/A" }));
+  const cells = fc.dictionary(place, fc.integer({ min: 0, max: 9 }));
+  fc.assert(
+    fc.property(cells, fc.dictionary(place, value), (old, edits) => {
+      const byRow = groupedByRow(Object.keys(old));
+      const column = (name: string) => /[A-Z]+/.exec(name)![0].padStart(3);
+      const inOrder = [...byRow].sort((a, b) => a[0] - b[0]).map(([row, names]) => `<row r="${row}">${names.sort((a, b) => (column(a) < column(b) ? -1 : 1)).map((n) => `<c r="${n}" s="${old[n]}"><v>${old[n]}</v></c>`).join("")}</row>`);
+      const before = sheet(`<sheetData>${inOrder.join("")}</sheetData>`);
+      const xml = patchSheet(before, new Map(Object.entries(edits).map(([name, v]) => [name, { value: v }])));
+      const after = readSheet(xml, []);
+      expect(new Set(after.keys())).toEqual(new Set([...Object.keys(old), ...Object.keys(edits)]));
+      for (const [name, cell] of after) {
+        expect(cell.value).toEqual(name in edits ? edits[name] : old[name]);
+        if (!(name in edits)) expect(xml.slice(cell.at, cell.at + cell.length)).toBe(`<c r="${name}" s="${old[name]}"><v>${old[name]}</v></c>`);
+      }
+      const order = [...after.keys()].map((name) => Number(/\d+/.exec(name)![0]) * 1000 + column(name).split("").reduce((n, c) => n * 26 + (c === " " ? 0 : c.charCodeAt(0) - 64), 0));
+      expect(order).toEqual([...order].sort((a, b) => a - b));
+      expect(patchSheet({ xml, cells: after }, new Map(Object.entries(edits).map(([name, v]) => [name, { value: v }])))).toBe(xml);
+    }),
+    { numRuns: 200 },
+  );
+});
+
+function groupedByRow(names: readonly string[]): Map<number, string[]> {
+  const rowsOf = new Map<number, string[]>();
+  for (const name of names) {
+    const row = Number(/\d+/.exec(name)![0]);
+    rowsOf.set(row, [...(rowsOf.get(row) ?? []), name]);
+  }
+  return rowsOf;
+}
