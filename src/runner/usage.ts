@@ -18,14 +18,16 @@ Results are preliminary-design estimates: check them against test or a higher-or
 
 Recalculates the workbook and writes it with the new values. Only the values of formula cells change (and the blocks of spills that grow or
 shrink); styles, charts, names, comments and everything else stay byte for byte. Numbers that agree to 13 digits are left as they are.
-Cells that use a function unknown here keep their stored value and are reported. Error cells are reported with their sentence.
+Error cells are reported with their sentence. Cells that cannot be calculated here keep their stored value and are reported with the reason: a
+function or name unknown here, a link to another book, a circle, a form of reference not known, dates counted from 1904. Cells whose value
+changes by itself (NOW, TODAY, RAND …) keep theirs too, so that a second run changes nothing.
 
   -o, --output FILE   where to write; the folder must exist
       --in-place      write over IN.xlsx
   -q, --quiet         report nothing but failures to read or write
   -h, --help          this text
 
-The report goes to standard error, one line a cell. Exit status: 0; 1 if a cell shows an error or was left as it was; 2 if a file cannot be
+The report goes to standard error, one line a cell. Exit status: 0; 1 if a cell shows an error or could not be calculated; 2 if a file cannot be
 read or written. The output appears whole or not at all.`,
   eval: `wallsheet eval FORMULA
 
