@@ -79,13 +79,20 @@ function watch(listener: () => void): () => void {
     ];
     await context.sync();
     return handlers;
+  }).catch((error: Error) => {
+    // Excel refuses to be listened to: say so where it can be found, and let the pane read once, which shows the refusal itself.
+    console.error(`Wallsheet cannot follow the sheet: ${error.message}`);
+    listener();
+    return [];
   });
   return () => {
-    void added.then((handlers) =>
-      Excel.run(handlers[0]!.context, async (context) => {
-        for (const handler of handlers) handler.remove();
-        await context.sync();
-      }),
+    void added.then(([first, ...rest]) =>
+      first === undefined
+        ? undefined
+        : Excel.run(first.context, async (context) => {
+            for (const handler of [first, ...rest]) handler.remove();
+            await context.sync();
+          }),
     );
   };
 }
