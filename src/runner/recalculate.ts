@@ -29,6 +29,7 @@ export interface Recalculated {
 const SAME_NUMBER = 1e-13;
 /** The engine's value of a cell that refers to itself; what other programs make of it hangs on their settings. */
 const CIRCLE = "#CYCLE";
+const LOST = "#REF";
 
 /** Recalculates a workbook's formulas and puts the changed values into the original package; every other byte of its parts stays. */
 export function recalculate(engine: Engine, bytes: Uint8Array): Recalculated {
@@ -63,8 +64,14 @@ function settledModel(engine: Engine, model: EngineModel, sheets: readonly Model
       if (model.getters.getCell(position)?.compiledFormula?.isBadExpression) {
         formula.left = { reason: "its formula is in a form not known here", byItself: false };
         unread = true;
-      } else if (model.getters.getEvaluatedCell(position).value === CIRCLE) {
+      }
+      const { value } = model.getters.getEvaluatedCell(position);
+      if (value === CIRCLE) {
         formula.left = { reason: "it stands in a circle of references, or hangs on one", byItself: false };
+        unread = true;
+      } else if (value === LOST && /(?<![\w.])INDIRECT\(/i.test(formula.text)) {
+        // The engine knows the book's names and some of its sheets by other words.
+        formula.left = { reason: "INDIRECT names something not found here", byItself: false };
         unread = true;
       }
       if (formula.cell.formula?.kind === "array") continue;

@@ -44,7 +44,7 @@ function byHand(formulas: readonly string[], settings = "", more = ""): Uint8Arr
     "xl/workbook.xml": `<workbook xmlns:r="r">${settings}<sheets><sheet name="S" sheetId="1" r:id="r1"/><sheet name="Wall's run 2" sheetId="2" r:id="r2"/></sheets></workbook>`,
     "xl/_rels/workbook.xml.rels": ["worksheets/sheet1.xml", "/xl/worksheets/sheet2.xml"].map((target, i) => `<Relationship Id="r${i + 1}" Type="t/worksheet" Target="${target}"/>`).join(""),
     [SHEET]: `<worksheet><sheetData>${rows.join("")}</sheetData></worksheet>`,
-    "xl/worksheets/sheet2.xml": '<worksheet><sheetData><row r="1"><c r="A1"><v>7</v></c></row></sheetData></worksheet>',
+    "xl/worksheets/sheet2.xml": '<worksheet><sheetData><row r="1"><c r="A1"><v>7</v></c><c r="C1" cm="1"><f t="array" ref="C1">_xldudf_WALL_EDGE_SPEED({1;0.75;0;-3},10)</f><v>0</v></c></row></sheetData></worksheet>',
   };
   return zipSync(Object.fromEntries(Object.entries(parts).map(([name, text]) => [name, strToU8(text)])));
 }
@@ -122,6 +122,7 @@ describe("formulas the engine does not calculate", () => {
     ["'[2]Other'!A1", /a link to another book/],
     ["_xldudf_WALL_NOSUCH(1)", /the function WALL_NOSUCH, unknown here/],
     ["_xlfn.FUTURE.THING(H1)", /the function FUTURE\.THING, unknown here/],
+    ["INDIRECT(\"'Wall''s run 2'!A1\")", /INDIRECT names something not found here/],
     ["A1+1", /a circle of references/],
   ])("%s keeps its stored value, and the cell that reads it uses that", (formula, reason) => {
     const { bytes, notes } = recalculate(engine, byHand([formula, "A1*2"]));
@@ -148,6 +149,8 @@ describe("formulas and texts as files hold them", () => {
     ["'Wall''s run 2'!A1+1", "<v>8</v>"],
     ["-H1^2", "<v>9</v>"],
     ["SUM(H:H)", "<v>12</v>"],
+    ["INDIRECT(\"H2\")", "<v>4</v>"],
+    ["SUM(_xlfn.ANCHORARRAY('Wall''s run 2'!C1))", "<v>35</v>"], // 10 √(1 − cp): 0 + 5 + 10 + 20
     ["H1%", "<v>0.03</v>"],
     ["[1]!WALL.EDGE_SPEED(0,H1)", "<v>3</v>"],
     ["wall.edge_speed(0,H1)", "<v>3</v>"],
