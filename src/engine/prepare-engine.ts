@@ -2,6 +2,7 @@ import { excelText } from "./excel-text";
 import { installCompiler } from "./install-compiler";
 import { installExcelFunctions } from "./install-excel-functions";
 import { installText } from "./install-text";
+import { installSpillReference } from "./install-spill-reference";
 import { installTolerantRegistry } from "./install-tolerant-registry";
 import { makeNormaliser } from "./normalise-formula";
 import { registerFunctions } from "./register-functions";
@@ -23,6 +24,7 @@ export function prepareEngine(library: EngineLibrary, functions: readonly SheetF
   installExcelFunctions(library);
   registerFunctions(library, functions);
   installTolerantRegistry(library);
+  installSpillReference(library);
   installText(library, normalise);
   installCompiler(library);
   selfTest(library);
