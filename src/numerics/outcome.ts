@@ -30,6 +30,13 @@ export type Reason =
   | "no similar layer"
   | "no reversed layer"
   | "layer lifts off"
+  | "reference speed missing"
+  | "beyond vacuum"
+  | "turbulent from stagnation"
+  | "start given twice"
+  | "too short"
+  | "onset outside"
+  | "onset too early"
   | "no convergence";
 
 /** A refusal: what is wrong and where. */

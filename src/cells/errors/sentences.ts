@@ -118,6 +118,29 @@ const SENTENCES: Record<Reason, Sentence> = {
     need: (a) => `${a} that leaves the layer on the wall`,
     found: () => "blows strongly enough to lift it off",
   },
+  "reference speed missing": { code: "#VALUE!", need: () => "a reference speed beside the reference Mach number", found: () => "none is given" },
+  "beyond vacuum": { code: "#VALUE!", need: () => "edge speeds that the reference stream can reach", found: (v) => `has ${v("value")}, beyond its expansion into vacuum` },
+  "turbulent from stagnation": {
+    code: "#VALUE!",
+    need: () => "a turbulent layer that begins where the edge speed is above 0",
+    found: () => "has 0 (stagnation point, where a layer is laminar); use LAYER_MARCH, or begin at a later station with start values",
+  },
+  "start given twice": { code: "#VALUE!", need: () => "one start value", found: () => "both start momentum loss and start Re theta are given" },
+  "too short": {
+    code: "#N/A",
+    need: (_a, v) => `a wall long enough for a turbulent layer, Re x of ${v("least")}`,
+    found: (v) => `it ends at Re x of ${v("value")}`,
+  },
+  "onset outside": {
+    code: "#VALUE!",
+    need: (_a, v) => `an onset station inside the column, ${v("least")} to ${v("most")}`,
+    found: (v) => `has ${v("value")}; write "from start" for a layer turbulent throughout`,
+  },
+  "onset too early": {
+    code: "#N/A",
+    need: (_a, v) => `an onset where Re θ is at least ${v("least")}`,
+    found: (v) => `finds ${v("value")} there, too little for a turbulent layer`,
+  },
   "no convergence": {
     code: "#N/A",
     need: () => "an iteration that settles",
