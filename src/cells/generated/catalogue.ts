@@ -1259,6 +1259,222 @@ export const catalogue: readonly CatalogueEntry[] = [
     ]
   },
   {
+    "name": "ENTRAINMENT_MARCH",
+    "family": "Turbulent",
+    "purpose": "Marches a turbulent layer along a wall by Head's entrainment method: thicknesses, shape factor, wall friction and mass defect at each station, and the station where the layer separates.",
+    "parameters": [
+      {
+        "name": "x",
+        "description": "Stations along the wall, rising; the turbulent layer begins at the first.",
+        "unit": "length",
+        "optional": false
+      },
+      {
+        "name": "ue",
+        "description": "Edge speed at each station, above 0.",
+        "unit": "speed",
+        "optional": false
+      },
+      {
+        "name": "nu",
+        "description": "Kinematic viscosity.",
+        "unit": "length²/time",
+        "optional": false
+      },
+      {
+        "name": "options",
+        "description": "Two columns (label, value) or text: start momentum loss or start Re theta, start shape (a number or after onset), edge fit (spline, monotone, smooth), noise, after separation (stop, continue), columns.",
+        "unit": "as their labels say",
+        "optional": true
+      },
+      {
+        "name": "radius",
+        "description": "Distance of the wall from the axis of a round body at each station; the first may be 0 (tip).",
+        "unit": "length",
+        "optional": true
+      }
+    ],
+    "gives": "A heading row, then a row a station; beyond separation the numbers are empty and state and note say where it lies.",
+    "resultUnit": "lengths, speeds and ratios in the units of x and ue",
+    "limits": [
+      "Steady turbulent layer of constant density on a smooth solid wall, thin beside the wall's radii, in a stream of low turbulence; Re θ from 500 to 50 000, H from 1.2 to 2.4. Without a start the layer is turbulent from a leading edge at the first station.",
+      "Separation is set at H = 2.4; Head gives 1.8 to 2.4, and the note says where 1.8 is passed. The friction law never falls to 0, so cf near separation is too high.",
+      "Against measured and computed layers: plate of Wieghardt & Tillmann from x = 0.94 m: θ 2.5 %, H 2.2 %, cf 2 to 6 % low; rising adverse gradient of Samuel & Joubert to 3.04 m: θ 4.5 %, cf 12 %; bubble of Coleman, Rumsey & Spalart: cf 15 % low upstream and no separation where the computed layer separates.",
+      "Total plate friction 6 % low at Re 1e7 and 12 to 22 % low at 1e8 to 1e9 (the power law of Ludwieg & Tillmann): use LAG_MARCH there.",
+      "δ3 is not part of the method: it follows from H as for power-law profiles, 1 % on the plate. After separation = continue carries on by the same equations, without support."
+    ],
+    "sources": [
+      "M. R. Head, ARC R&M 3152 (1958) (entrainment); H. Ludwieg & W. Tillmann, Ing.-Arch. 17 (1949) 288–299 (wall friction).",
+      "T. Cebeci & P. Bradshaw, Momentum Transfer in Boundary Layers (1977): fits of Head's curves H1(H) and CE(H1), here joined smoothly where their branches cross, H = 1.585."
+    ],
+    "examples": [
+      {
+        "formula": "=ROUND(INDEX(WALL.ENTRAINMENT_MARCH({0;1;2},{30;30;30},0.000015,\"start momentum loss = 0.001; start shape = 1.45\"),4,3),5)",
+        "value": 0.00393
+      }
+    ],
+    "words": [
+      "boundary",
+      "layer",
+      "turbulent",
+      "entrainment",
+      "momentum",
+      "thickness",
+      "displacement",
+      "thickness",
+      "separation",
+      "skin",
+      "friction"
+    ]
+  },
+  {
+    "name": "LAG_MARCH",
+    "family": "Turbulent",
+    "purpose": "Marches a turbulent layer along a wall by the lag-entrainment method, which remembers the layer's history: the table of ENTRAINMENT_MARCH, better in changing gradients and at high speed.",
+    "parameters": [
+      {
+        "name": "x",
+        "description": "Stations along the wall, rising; the turbulent layer begins at the first.",
+        "unit": "length",
+        "optional": false
+      },
+      {
+        "name": "ue",
+        "description": "Edge speed at each station, above 0.",
+        "unit": "speed",
+        "optional": false
+      },
+      {
+        "name": "nu",
+        "description": "Kinematic viscosity; with a reference Mach number that of the reference stream.",
+        "unit": "length²/time",
+        "optional": false
+      },
+      {
+        "name": "options",
+        "description": "Two columns (label, value) or text: start momentum loss or start Re theta, start shape (a number or after onset), start entrainment (a number or equilibrium), reference Mach with reference speed, gamma, edge fit (spline, monotone, smooth), noise, after separation (stop, continue), columns.",
+        "unit": "as their labels say",
+        "optional": true
+      },
+      {
+        "name": "radius",
+        "description": "Distance of the wall from the axis of a round body at each station; the first may be 0 (tip).",
+        "unit": "length",
+        "optional": true
+      }
+    ],
+    "gives": "A heading row, then a row a station; beyond separation the numbers are empty and state and note say where it lies.",
+    "resultUnit": "lengths, speeds and ratios in the units of x and ue; thicknesses with density where a Mach number is given, m and dm/dx per reference density",
+    "limits": [
+      "Steady turbulent layer on a smooth, solid, adiabatic wall, thin beside the wall's radii, in a stream of low turbulence; no curvature, convergence or free-stream turbulence corrections. Re θ above 200; edge Mach number held against measurements to 0.75, published to 3.",
+      "Separation where the method's wall friction reaches 0 (H̄ = 2.2 times its plate value). Without a start the layer is turbulent from a leading edge at the first station.",
+      "Against measured and computed layers: plate of Wieghardt & Tillmann from x = 0.94 m: θ 2.4 %, cf 2.5 % (started with its own H), H 3.4 % low below Re θ = 5000 and 1.3 % at 15 000; rising adverse gradient of Samuel & Joubert to 3.04 m: θ 3.7 %, cf 11 % (Clauser plots, floating element); bubble of Coleman, Rumsey & Spalart: θ 3 %, cf 5 % to two bubble lengths before separation, separation later than computed.",
+      "Total plate friction within 3 % of Prandtl–Schlichting from Re 1e6 to 1e9.",
+      "δ3 is not part of the method: it follows from H as for power-law profiles, and stays empty where a Mach number is given. Edge viscosity by temperature to the power 0.76. After separation = continue carries on by the same equations, without support."
+    ],
+    "sources": [
+      "J. E. Green, D. J. Weeks & J. W. F. Brooman, ARC R&M 3791 (1973) (equations from memory)."
+    ],
+    "examples": [
+      {
+        "formula": "=ROUND(INDEX(WALL.LAG_MARCH({0;1;2},{30;30;30},0.000015,\"start momentum loss = 0.001; start shape = 1.45\"),4,3),5)",
+        "value": 0.00406
+      }
+    ],
+    "words": [
+      "boundary",
+      "layer",
+      "turbulent",
+      "lag",
+      "entrainment",
+      "compressible",
+      "momentum",
+      "thickness",
+      "displacement",
+      "thickness",
+      "separation",
+      "skin",
+      "friction"
+    ]
+  },
+  {
+    "name": "LAYER_MARCH",
+    "family": "Surface",
+    "purpose": "Marches the layer along a whole wall in one call: laminar from the start, an onset found or given, turbulent to the end, in one table with a state for each row.",
+    "parameters": [
+      {
+        "name": "x",
+        "description": "Stations along the wall from where the layer begins, rising.",
+        "unit": "length",
+        "optional": false
+      },
+      {
+        "name": "ue",
+        "description": "Edge speed at each station, above 0; the first may be 0 (stagnation point).",
+        "unit": "speed",
+        "optional": false
+      },
+      {
+        "name": "nu",
+        "description": "Kinematic viscosity; with a reference Mach number that of the reference stream.",
+        "unit": "length²/time",
+        "optional": false
+      },
+      {
+        "name": "options",
+        "description": "Two columns (label, value) or text: onset (free, a station, from start, none), onset criterion (Michel), trip momentum loss, transition zone (none, Dhawan-Narasimha), laminar method (Thwaites, energy, field), turbulent method (lag, entrainment), start momentum loss, start shape, reference Mach with reference speed, gamma, edge fit (spline, monotone, smooth), noise, after separation (stop, continue), columns.",
+        "unit": "as their labels say",
+        "optional": true
+      },
+      {
+        "name": "radius",
+        "description": "Distance of the wall from the axis of a round body at each station; the first may be 0 (nose).",
+        "unit": "length",
+        "optional": true
+      }
+    ],
+    "gives": "A heading row, then a row a station: state is laminar, transition, bubble, turbulent or separated; beyond the end of the layer the numbers are empty and the note says why.",
+    "resultUnit": "lengths, speeds and ratios in the units of x and ue",
+    "limits": [
+      "Steady layer on a smooth solid wall, thin beside the wall's radii. Each part holds where its method does: see THWAITES_MARCH, ENERGY_MARCH, FIELD_MARCH, LAG_MARCH, ENTRAINMENT_MARCH. The laminar part is of constant density also where a Mach number is given.",
+      "Onset by a criterion is uncertain by tens of per cent of Re x: compare a free onset with fixed ones on both sides of it. Michel's data are of aerofoils and plates in quiet streams, Re x 3e5 to 7e6; roughness, noise, sweep and stream turbulence bring onset forward.",
+      "At the onset θ goes through (plus trip momentum loss where given) and H takes at once the value of a plate layer with the same Re θ; transition zone = Dhawan-Narasimha spreads the change by intermittency instead, with laminar H and cf by Thwaites' relations at the local gradient.",
+      "A laminar layer that separates turns turbulent over a short bubble by Horton's rules where the edge speed lets it reattach on the wall; wall friction in the bubble is set to 0. A long bubble or a stall changes the whole edge speed and is outside this call.",
+      "From start on a stagnation point: laminar up to Re θ = 320, below which no lasting turbulent layer has been seen.",
+      "All-turbulent plate: total friction within 3 % of Prandtl–Schlichting from Re 1e6 to 1e9 (turbulent method = lag)."
+    ],
+    "sources": [
+      "B. Thwaites, Aero. Quart. 1 (1949); J. E. Green, D. J. Weeks & J. W. F. Brooman, ARC R&M 3791 (1973); M. R. Head, ARC R&M 3152 (1958) (the methods, as chosen).",
+      "R. Michel, ONERA Rapport 1/1578A (1951) (onset); S. Dhawan & R. Narasimha, J. Fluid Mech. 3 (1958) 418–436 (intermittency); H. P. Horton, ARC CP 1073 (1969) (bubble); J. H. Preston, J. Fluid Mech. 3 (1958) 373–384 (least Re θ). Page numbers and constants from memory."
+    ],
+    "examples": [
+      {
+        "formula": "=INDEX(WALL.LAYER_MARCH({0;0.5;1;1.5;2},{50;50;50;50;50},0.000015,\"onset = free; columns = state\"),3,1)",
+        "value": "laminar"
+      },
+      {
+        "formula": "=ROUND(INDEX(WALL.LAYER_MARCH({0;0.5;1;1.5;2},{50;50;50;50;50},0.000015,\"onset = from start; columns = θ\"),6,1),5)",
+        "value": 0.00316
+      }
+    ],
+    "words": [
+      "boundary",
+      "layer",
+      "transition",
+      "laminar",
+      "turbulent",
+      "surface",
+      "wing",
+      "hull",
+      "drag",
+      "momentum",
+      "thickness",
+      "separation",
+      "bubble",
+      "trip"
+    ]
+  },
+  {
     "name": "WALL_BLOW_VELOCITY",
     "family": "Displacement",
     "purpose": "Gives the blow velocity dm/dx: the wall-normal speed that an inviscid calculation must be given at the wall to feel the layer.",

@@ -19,6 +19,9 @@ import { fieldProfile } from "../laminar/field-profile";
 import { similarLayer } from "../laminar/similar-layer";
 import { similarProfile } from "../laminar/similar-profile";
 import { thwaitesMarch } from "../laminar/thwaites-march";
+import { entrainmentMarch } from "../turbulent/entrainment-march";
+import { lagMarch } from "../turbulent/lag-march";
+import { layerMarch } from "../surface/layer-march";
 import { wallBlowVelocity } from "../displacement/wall-blow-velocity";
 import { columnOf } from "../sheet/column-of";
 import { inputCheck } from "../sheet/input-check";
@@ -47,6 +50,9 @@ export const wallFunctions: Readonly<Record<string, (...args: any[]) => unknown>
   SIMILAR_LAYER: similarLayer,
   SIMILAR_PROFILE: similarProfile,
   THWAITES_MARCH: thwaitesMarch,
+  ENTRAINMENT_MARCH: entrainmentMarch,
+  LAG_MARCH: lagMarch,
+  LAYER_MARCH: layerMarch,
   WALL_BLOW_VELOCITY: wallBlowVelocity,
   COLUMN_OF: columnOf,
   INPUT_CHECK: inputCheck,

@@ -4,6 +4,7 @@ import { openCall } from "../reading/call";
 import { readOptions } from "../reading/read-options";
 import { formatNumber } from "../writing/format-number";
 import { marchTable } from "./march-table";
+import { laminarStartShape } from "./laminar-start-shape";
 import { readWall } from "./read-wall";
 
 const ACCEPTED = ["start momentum loss", "start shape", "edge fit", "noise", "after separation", "columns"] as const;
@@ -45,7 +46,7 @@ export function energyMarch(x: any[][], ue: any[][], nu: any, options: any[][], 
   const { wall, nu: viscosity, words } = readWall(call, { x, ue, nu, radius, wall_velocity }, settings);
   const made = marchByEnergy(wall, viscosity, {
     startMomentumLoss: settings.number("start momentum loss"),
-    startShape: settings.number("start shape"),
+    startShape: laminarStartShape(call, settings),
     afterSeparation: (settings.word("after separation") ?? "stop") as "stop" | "continue",
   });
   if (!made.ok) throw refusalError(call, made);

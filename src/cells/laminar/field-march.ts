@@ -5,6 +5,7 @@ import { openCall } from "../reading/call";
 import { readOptions } from "../reading/read-options";
 import { formatNumber } from "../writing/format-number";
 import { marchTable } from "./march-table";
+import { laminarStartShape } from "./laminar-start-shape";
 import { readWall } from "./read-wall";
 
 const ACCEPTED = ["start momentum loss", "start shape", "edge fit", "noise", "after separation", "grid refinement", "Richardson", "columns"] as const;
@@ -47,7 +48,7 @@ export function fieldMarch(x: any[][], ue: any[][], nu: any, options: any[][], r
   const richardson = settings.word("Richardson") === "yes";
   const made = marchByField(wall, viscosity, {
     startMomentumLoss: settings.number("start momentum loss"),
-    startShape: settings.number("start shape"),
+    startShape: laminarStartShape(call, settings),
     refinement: settings.number("grid refinement"),
     richardson,
   });

@@ -4,6 +4,7 @@ import { openCall } from "../reading/call";
 import { readOptions } from "../reading/read-options";
 import { readNumber } from "../reading/read-value";
 import { spillTable } from "../writing/spill-table";
+import { laminarStartShape } from "./laminar-start-shape";
 import { readWall } from "./read-wall";
 
 const ACCEPTED = ["start momentum loss", "start shape", "edge fit", "noise", "grid refinement", "columns"] as const;
@@ -42,7 +43,7 @@ export function fieldProfile(x: any[][], ue: any[][], nu: any, station: any, opt
   const at = readNumber(call, "station", station);
   const made = profileOfField(wall, viscosity, at, {
     startMomentumLoss: settings.number("start momentum loss"),
-    startShape: settings.number("start shape"),
+    startShape: laminarStartShape(call, settings),
     refinement: settings.number("grid refinement"),
   });
   if (!made.ok) throw refusalError(call, made);

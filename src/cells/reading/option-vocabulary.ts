@@ -3,17 +3,19 @@ export type OptionKind =
   | { kind: "number"; positive?: boolean; notNegative?: boolean }
   | { kind: "fraction" }
   | { kind: "choice"; choices: readonly string[] }
-  | { kind: "number or choice"; choices: readonly string[] }
+  | { kind: "number or choice"; choices: readonly string[]; positive?: boolean }
   | { kind: "columns" };
 
 /** The one list of option labels (design.md §3); a function accepts the labels it names. */
 export const OPTION_VOCABULARY = {
   "start momentum loss": { kind: "number", notNegative: true },
-  "start shape": { kind: "number", positive: true },
+  "start shape": { kind: "number or choice", choices: ["after onset"], positive: true },
   "start Re theta": { kind: "number", positive: true },
   "start entrainment": { kind: "number or choice", choices: ["equilibrium"] },
   onset: { kind: "number or choice", choices: ["free", "from start", "none"] },
   "onset criterion": { kind: "choice", choices: ["Michel"] },
+  "trip momentum loss": { kind: "number", notNegative: true },
+  "transition zone": { kind: "choice", choices: ["none", "Dhawan-Narasimha"] },
   "turbulence level": { kind: "fraction" },
   "critical amplification": { kind: "number", positive: true },
   "laminar method": { kind: "choice", choices: ["Thwaites", "energy", "field"] },

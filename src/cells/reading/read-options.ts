@@ -113,9 +113,14 @@ function valueOf(call: Call, label: OptionLabel, value: CellValue): number | str
       return number;
     }
     case "number or choice":
-      if (value.kind === "number") return value.value;
-      return NUMBER_TEXT.test(written) ? numberFrom(call, label, written) : chosen(call, `option "${label}"`, written, rule.choices);
+      if (value.kind === "text" && !NUMBER_TEXT.test(written)) return chosen(call, `option "${label}"`, written, rule.choices);
+      return checked(call, label, value.kind === "number" ? value.value : numberFrom(call, label, written), rule.positive === true);
   }
+}
+
+function checked(call: Call, label: OptionLabel, number: number, positive: boolean): number {
+  if (Number.isFinite(number) && (!positive || number > 0)) return number;
+  throw cellError("#VALUE!", `${call.name} needs option "${label}" ${positive ? "above 0" : "as a finite number"}; it has ${number}`);
 }
 
 function numberFrom(call: Call, label: OptionLabel, written: string): number {
