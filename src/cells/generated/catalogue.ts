@@ -1550,6 +1550,55 @@ export const catalogue: readonly CatalogueEntry[] = [
     ]
   },
   {
+    "name": "LAYER_SUMMARY",
+    "family": "Surface",
+    "purpose": "Sums up a layer's table: onset, separation, values at the end, largest wall friction, friction drag of the side, and what its notes say.",
+    "parameters": [
+      {
+        "name": "table",
+        "description": "A table spilled by a march, heading row included, such as D5#; it needs station, edge speed, θ, δ*, H, cf, state and note.",
+        "unit": "as spilled",
+        "optional": false
+      },
+      {
+        "name": "reference_speed",
+        "description": "Speed of the reference flow; omitted: the friction is given as a force over ½ρ, without coefficient.",
+        "unit": "speed",
+        "optional": true
+      },
+      {
+        "name": "chord",
+        "description": "Length the drag coefficient is referred to; omitted: from the first station to the last.",
+        "unit": "length",
+        "optional": true
+      }
+    ],
+    "gives": "Quantity and value, one a row; empty where there is nothing to tell.",
+    "resultUnit": "in the units of the table",
+    "limits": [
+      "One side of a body; a table spilled by a march of this add-in with its columns whole (columns option: at least station, edge speed, θ, δ*, H, cf, state, note).",
+      "Friction drag is that of the wall without pressure drag, per unit span, constant density; wall friction beyond separation counts as 0, and the onset's jump is taken where the note says it is."
+    ],
+    "sources": [
+      "Own definition; friction drag as in FRICTION_DRAG."
+    ],
+    "examples": [
+      {
+        "formula": "=ROUND(INDEX(WALL.LAYER_SUMMARY(WALL.LAYER_MARCH({0;0.5;1;1.5;2},{50;50;50;50;50},0.000015,\"onset = from start\"),50),14,2),5)",
+        "value": 0.00313
+      }
+    ],
+    "words": [
+      "summary",
+      "result",
+      "onset",
+      "separation",
+      "drag",
+      "end",
+      "values"
+    ]
+  },
+  {
     "name": "FRICTION_DRAG",
     "family": "Drag",
     "purpose": "Gives the friction drag coefficient of one side of a wall from its wall friction and edge speed: ∫ cf (ue/U)² dx over the chord.",
@@ -1739,7 +1788,7 @@ export const catalogue: readonly CatalogueEntry[] = [
     "limits": [
       "Attached layers to the trailing edge, or nearly: H up to 2.8 (plus M²), edge speed ratio up to 3; refused beyond. Trailing-edge speeds of measured pressures or of an inviscid solution relieved at the edge: an inviscid stagnation point there gives nothing.",
       "With a Mach number the exponent takes H and the density of the edge: (H + 1 + 0.4 M²)/2 + 2 and the factor ρe/ρ∞; no shocks between layer and wake.",
-      "Held against the measured wake of RAE 2822 at Mach 0.676: measured trailing-edge layers give 85.7 counts for 85 measured."
+      "Held against RAE 2822 at Mach 0.676, 85 counts measured in the wake: the measured trailing-edge layers (H 2.3 on the upper side) give 95, layers by LAYER_MARCH from the measured pressures 86."
     ],
     "sources": [
       "H. B. Squire & A. D. Young, ARC R&M 1838 (1938); the compressible form is the same integration with −M² in the momentum equation (own, for γ = 1.4)."

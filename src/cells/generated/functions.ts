@@ -23,6 +23,7 @@ import { entrainmentMarch } from "../turbulent/entrainment-march";
 import { lagMarch } from "../turbulent/lag-march";
 import { separationMargin } from "../turbulent/separation-margin";
 import { layerMarch } from "../surface/layer-march";
+import { layerSummary } from "../surface/layer-summary";
 import { frictionDrag } from "../drag/friction-drag";
 import { rakeDrag } from "../drag/rake-drag";
 import { wakeDrag } from "../drag/wake-drag";
@@ -58,6 +59,7 @@ export const wallFunctions: Readonly<Record<string, (...args: any[]) => unknown>
   LAG_MARCH: lagMarch,
   SEPARATION_MARGIN: separationMargin,
   LAYER_MARCH: layerMarch,
+  LAYER_SUMMARY: layerSummary,
   FRICTION_DRAG: frictionDrag,
   RAKE_DRAG: rakeDrag,
   WAKE_DRAG: wakeDrag,
