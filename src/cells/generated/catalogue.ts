@@ -920,7 +920,7 @@ export const catalogue: readonly CatalogueEntry[] = [
   {
     "name": "FIELD_MARCH",
     "family": "Laminar",
-    "purpose": "Marches a laminar layer along a wall by the full boundary-layer equations, with suction or blowing through the wall: the same table as THWAITES_MARCH, and the judge of the integral methods.",
+    "purpose": "Marches a layer along a wall by the full boundary-layer equations, laminar with suction or blowing through the wall, or turbulent from an onset on by an eddy viscosity: the judge of the integral methods.",
     "parameters": [
       {
         "name": "x",
@@ -942,7 +942,7 @@ export const catalogue: readonly CatalogueEntry[] = [
       },
       {
         "name": "options",
-        "description": "Two columns (label, value) or text: start momentum loss, start shape, edge fit (spline, monotone, smooth), noise, grid refinement (1 to 8), Richardson (no, yes), after separation (stop), columns.",
+        "description": "Two columns (label, value) or text: start momentum loss, start shape, onset (none, free, a station, from start), onset criterion (Michel), edge fit (spline, monotone, smooth), noise, grid refinement (1 to 8), Richardson (no, yes), after separation (stop), columns.",
         "unit": "as their labels say",
         "optional": true
       },
@@ -966,9 +966,12 @@ export const catalogue: readonly CatalogueEntry[] = [
       "Error of the numbers themselves at default settings on four laminar layers (1 − x, 1 − x², sin x, Hiemenz's cylinder; 50 to 200 stations): θ, δ*, δ3 and H within 0.04 % up to the last station before separation, cf 0.04 % up to 97 % of the way, separation station 0.01 %. Richardson = yes brings θ and δ* to 0.001 % and cf to 0.0005 %.",
       "Flat plate within 0.0005 %; sphere 104.8°; uniform blowing of a flat plate lifts off at (vw/ue)² Rex = 0.745.",
       "Few stations cost what the edge curve between them is wrong, not what the march is: steps are chosen by their own error. 15 stations change the separation station of seven decelerating flows by less than 0.001 % and θ by 0.002 % (edge fit = spline). Separation comes from the square-root law of the wall shear; at a given edge speed the equations end there, and after separation = continue adds nothing.",
-      "A start with a given θ takes the profile of a similar layer on a solid wall; one that hardly holds to the wall (H near 4) and does not fit the gradient may have no solution. No transition: the layer is taken as laminar throughout."
+      "A start with a given θ takes the profile of a similar layer on a solid wall; one that hardly holds to the wall (H near 4) and does not fit the gradient may have no solution. Laminar throughout unless an onset is given.",
+      "Turbulent part (onset given): constant density, solid wall, the eddy viscosity in full at once from the onset on; about 0.2 s. Its numbers: θ 0.3 %, cf 0.1 %, H 0.1 % against a grid and steps twice as fine. The model: wall friction of the plate 0 to 4 % low against Wieghardt & Tillmann and DNS, H 2 % low; Samuel & Joubert and the bubbles of Coleman, Rumsey & Spalart: see the comparison table of the help.",
+      "A laminar layer that separates first is made turbulent half-way between its last station and separation, without a bubble. From start: from Re θ = 100 behind a leading edge, 320 behind a stagnation point."
     ],
     "sources": [
+      "T. Cebeci & A. M. O. Smith, Analysis of Turbulent Boundary Layers (1974), and T. Cebeci & P. Bradshaw, Momentum Transfer in Boundary Layers (1977): eddy viscosity (constants from memory).",
       "H. B. Keller & T. Cebeci, Lecture Notes in Physics 8 (1971) 92–100 (block elimination; ours is of fourth order across the layer and, with backward differences, of third along the wall).",
       "S. Goldstein, Q. J. Mech. Appl. Math. 1 (1948) 43–69 (separation); W. Mangler, ZAMM 28 (1948) 97–103 (round bodies); L. F. Richardson, Phil. Trans. A 226 (1927) 299–361."
     ],
