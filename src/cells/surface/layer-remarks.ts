@@ -25,7 +25,7 @@ export function layerRemarks(march: LayerMarch, method: "lag" | "entrainment" | 
     });
   }
   if (onset !== null) {
-    const shape = `, H from ${formatNumber(onset.startShape)}`;
+    const shape = onset.momentumReynolds > 0 ? `, H from ${formatNumber(onset.startShape)}` : "";
     const low = onset.kind === "fixed" && onset.momentumReynolds < LEAST_TURBULENT_REYNOLDS ? `; below Re θ ${LEAST_TURBULENT_REYNOLDS} a trip may not hold` : "";
     const range = onset.remark === "" ? "" : `; ${onset.remark}`;
     out.push({ x: onset.x, words: `${onsetWords(HOW[onset.kind], onset.x, onset.momentumReynolds)}${shape}${low}${range}` });
