@@ -90,7 +90,7 @@ export function onsetPlace(part: LaminarPart, panel: number, x: number, turbulen
 }
 
 /** Places looked at in a panel before the crossing is refined. */
-const LOOKS = 4;
+const LOOKS = 2;
 
 /** Where a criterion is first met, located inside the panel. */
 export function findOnset(part: LaminarPart, criterion: Pick<OnsetCriterion, "excess">, turbulence: number): { panel: number; x: number } | null {
