@@ -23,6 +23,8 @@ const LAST = HEADING_ROW + TAPS.length;
 /** Rows a side's table may take. */
 const ROOM = 30;
 const COLUMNS = "station, edge_speed, momentum_loss, defect, shape, friction, state, note";
+/** Stations next to the stagnation point, whose large cf would flatten the rest of a chart. */
+const NEAR_NOSE = 4;
 const SIDES = [
   { side: "upper", taps: "E", layer: "K", column: "B" },
   { side: "lower", taps: "U", layer: "AA", column: "C" },
@@ -82,6 +84,8 @@ export function gliderDrag(look: SheetLook, input: number): Record<string, unkno
     cells[`${layer}${HEADING_ROW - 2}`] = `${side} side: LAYER_MARCH`;
     cells[`${at}${HEADING_ROW}`] = `=WALL.SURFACE_FROM_TAPS(${taps("A")},${taps("B")},${taps("C")},"${side}",B6)`;
     cells[`${layer}${HEADING_ROW}`] = `=WALL.LAYER_MARCH(WALL.COLUMN_OF(${surface},"station"),WALL.COLUMN_OF(${surface},"edge_speed"),B7,A10:B13)`;
+    ["m", "m", "m", "m/s"].forEach((unit, i) => (cells[`${shift(at, i)}${HEADING_ROW - 1}`] = unit));
+    ["m", "m/s", "m", "m", "–", "–"].forEach((unit, i) => (cells[`${shift(layer, i)}${HEADING_ROW - 1}`] = unit));
     const summary = (row: number) => `=INDEX(WALL.LAYER_SUMMARY(${table},B6,B8),${row},2)`;
     cells[`${column}16`] = summary(2);
     cells[`${column}17`] = summary(3);
@@ -92,11 +96,11 @@ export function gliderDrag(look: SheetLook, input: number): Record<string, unkno
     // At the tail itself, or nothing.
     cells[`${column}22`] = `=IF(${column}19="",WALL.WAKE_DRAG(INDEX(WALL.LAYER_SUMMARY(${table}),9,2),${column}20,INDEX(WALL.LAYER_SUMMARY(${table}),8,2)/B6,,B8),"")`;
   }
-  const column = (layer: string, offset: number, rows: number) => block(`${shift(layer, offset)}${FIRST}:${shift(layer, offset)}${FIRST + rows - 1}`);
+  const column = (layer: string, offset: number, from: number, rows: number) => block(`${shift(layer, offset)}${FIRST + from}:${shift(layer, offset)}${FIRST + rows - 1}`);
   const upper = 21;
   const lower = 18;
-  const chart = (title: string, yLabel: string, offset: number, layer: string, rows: number, label: string, at: string, id: string) =>
-    chartFigure({ title, x: column(layer, 0, rows), xLabel: "station x [m]", series: [{ label, values: column(layer, offset, rows) }], yLabel, at: block(at) }, id, { width: 330, height: 250 });
+  const chart = (title: string, yLabel: string, offset: number, layer: string, from: number, rows: number, label: string, at: string, id: string) =>
+    chartFigure({ title, x: column(layer, 0, from, rows), xLabel: "station x [m]", series: [{ label, values: column(layer, offset, from, rows) }], yLabel, at: block(at) }, id, { width: at.startsWith("F") ? 263 : 299, height: 270 });
   const width = (letters: string, size: number): [number, { size: number }] => [columnIndex(letters), { size }];
   return {
     id: "glider",
@@ -113,7 +117,7 @@ export function gliderDrag(look: SheetLook, input: number): Record<string, unkno
     styles: {
       A1: look.title, A2: look.remark, A3: look.caution, A24: look.remark, A5: look.section, A9: look.section, "A15:D15": look.section,
       B6: input, B7: input, B8: input, B10: input, B11: input, B12: input, B13: input,
-      [`A${HEADING_ROW - 2}:AH${HEADING_ROW - 2}`]: look.remark, [`A${HEADING_ROW - 1}:C${HEADING_ROW - 1}`]: look.unit, [`A${HEADING_ROW}:AH${HEADING_ROW}`]: look.heading,
+      [`A${HEADING_ROW - 2}:AH${HEADING_ROW - 2}`]: look.remark, [`A${HEADING_ROW - 1}:AH${HEADING_ROW - 1}`]: look.unit, [`A${HEADING_ROW}:AH${HEADING_ROW}`]: look.heading,
       [`A${FIRST}:C${LAST}`]: input,
     },
     formats: {
@@ -132,10 +136,10 @@ export function gliderDrag(look: SheetLook, input: number): Record<string, unkno
       ),
     },
     figures: [
-      chart("Upper side: shape factor", "H [–]", 4, "K", upper, "shape factor H", "F5", "glider-upper-shape"),
-      chart("Upper side: wall friction", "cf [–]", 5, "K", upper, "wall friction cf", "I5", "glider-upper-friction"),
-      chart("Lower side: shape factor", "H [–]", 4, "AA", lower, "shape factor H", "F19", "glider-lower-shape"),
-      chart("Lower side: wall friction", "cf [–]", 5, "AA", lower, "wall friction cf", "I19", "glider-lower-friction"),
+      chart("Upper side: shape factor", "H [–]", 4, "K", 0, upper, "shape factor H", "F5", "glider-upper-shape"),
+      chart("Upper side: wall friction", "cf [–]", 5, "K", NEAR_NOSE, upper, "wall friction cf", "I5", "glider-upper-friction"),
+      chart("Lower side: shape factor", "H [–]", 4, "AA", 0, lower, "shape factor H", "F19", "glider-lower-shape"),
+      chart("Lower side: wall friction", "cf [–]", 5, "AA", NEAR_NOSE, lower, "wall friction cf", "I19", "glider-lower-friction"),
     ],
   };
 }

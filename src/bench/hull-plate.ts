@@ -57,6 +57,7 @@ export function hullPlate(look: SheetLook, input: number): Record<string, unknow
     [`C${HEADING_ROW}`]: "edge speed ue",
     [`E${HEADING_ROW}`]: `=WALL.LAYER_MARCH(${rows("A")},${rows("C")},B7,A10:B11)`,
   };
+  ["m", "m/s", "m", "m", "m", "–", "m", "–", "–", "–", "m²/s", "m/s", "–", "–"].forEach((unit, i) => (cells[`${String.fromCharCode(69 + i)}${HEADING_ROW - 1}`] = unit));
   STATIONS.forEach(([x, ratio], i) => {
     cells[`A${FIRST + i}`] = String(x);
     cells[`B${FIRST + i}`] = String(ratio);
@@ -78,7 +79,7 @@ export function hullPlate(look: SheetLook, input: number): Record<string, unknow
     styles: {
       A1: look.title, A2: look.remark, A3: look.caution, A21: look.remark, A8: look.remark, A5: look.section, A9: look.section, A13: look.section,
       B6: input, B7: input, B10: input, B11: input,
-      [`A${HEADING_ROW - 1}:C${HEADING_ROW - 1}`]: look.unit, [`A${HEADING_ROW}:T${HEADING_ROW}`]: look.heading, [`A${FIRST}:B${LAST}`]: input,
+      [`A${HEADING_ROW - 1}:R${HEADING_ROW - 1}`]: look.unit, [`A${HEADING_ROW}:T${HEADING_ROW}`]: look.heading, [`A${FIRST}:B${LAST}`]: input,
     },
     formats: {
       B7: look.small, B14: look.small, "B15:B16": look.count, B17: look.ratio, "B19:B20": look.station,
