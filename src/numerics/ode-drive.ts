@@ -28,6 +28,8 @@ export interface OdeSettings {
 const SAFETY = 0.9;
 const SHRINK_MOST = 0.2;
 const GROW_MOST = 4;
+/** Steps tried on the way to one place: far more than a smooth march takes, so that a hostile column ends too. */
+const MOST_TRIES = 20_000;
 /** Share of a step to which an event is located. */
 const EVENT_TOLERANCE = 1e-12;
 
@@ -52,7 +54,8 @@ export function odeDrive(right: OdeRight, x: number, y: Float64Array, settings: 
 
   function to(end: number): "there" | "event" | "stuck" {
     if (!fresh) return "stuck";
-    while (drive.x < end) {
+    for (let tries = 0; drive.x < end; tries += 1) {
+      if (tries > MOST_TRIES) return "stuck";
       const left = end - drive.x;
       const h = wanted >= left ? left : wanted > left / 2 ? left / 2 : wanted;
       const solved = step(right, drive.x, state, h, slope, work, next, error);

@@ -1500,7 +1500,7 @@ export const catalogue: readonly CatalogueEntry[] = [
       },
       {
         "name": "options",
-        "description": "Two columns (label, value) or text: onset (free, a station, from start, none), onset criterion (Michel), trip momentum loss, transition zone (none, Dhawan-Narasimha), laminar method (Thwaites, energy, field), turbulent method (lag, entrainment), start momentum loss, start shape, reference Mach with reference speed, gamma, edge fit (spline, monotone, smooth), noise, after separation (stop, continue), columns.",
+        "description": "Two columns (label, value) or text: onset (free, a station, from start, none), onset criterion (Michel), trip momentum loss, transition zone (none, Dhawan-Narasimha), laminar method (Thwaites, energy, field), turbulent method (lag, entrainment, field), start momentum loss, start shape, reference Mach with reference speed, gamma, edge fit (spline, monotone, smooth), noise, after separation (stop, continue), columns.",
         "unit": "as their labels say",
         "optional": true
       },

@@ -11,6 +11,7 @@ import { layerRemarks } from "./layer-remarks";
 import { layerTable } from "./layer-table";
 import { readGas } from "./read-gas";
 import { readOnset } from "./read-onset";
+import { turbulentFieldTable } from "./turbulent-field-table";
 
 const ACCEPTED = [
   "start momentum loss",
@@ -38,7 +39,7 @@ const ACCEPTED = [
  * @param {any[][]} x Stations along the wall from where the layer begins, rising.
  * @param {any[][]} ue Edge speed at each station, above 0; the first may be 0 (stagnation point).
  * @param {any} nu Kinematic viscosity; with a reference Mach number that of the reference stream.
- * @param {any[][]} [options] Two columns (label, value) or text: onset (free, a station, from start, none), onset criterion (Michel), trip momentum loss, transition zone (none, Dhawan-Narasimha), laminar method (Thwaites, energy, field), turbulent method (lag, entrainment), start momentum loss, start shape, reference Mach with reference speed, gamma, edge fit (spline, monotone, smooth), noise, after separation (stop, continue), columns.
+ * @param {any[][]} [options] Two columns (label, value) or text: onset (free, a station, from start, none), onset criterion (Michel), trip momentum loss, transition zone (none, Dhawan-Narasimha), laminar method (Thwaites, energy, field), turbulent method (lag, entrainment, field), start momentum loss, start shape, reference Mach with reference speed, gamma, edge fit (spline, monotone, smooth), noise, after separation (stop, continue), columns.
  * @param {any[][]} [radius] Distance of the wall from the axis of a round body at each station; the first may be 0 (nose).
  * @param {CustomFunctions.Invocation} invocation Filled in by the host.
  * @returns {any[][]} A heading row, then a row a station: state is laminar, transition, bubble, turbulent or separated; beyond the end of the layer the numbers are empty and the note says why.
@@ -64,8 +65,10 @@ const ACCEPTED = [
 export function layerMarch(x: any[][], ue: any[][], nu: any, options: any[][], radius: any[][], invocation: CustomFunctions.Invocation): any[][] {
   const call = openCall("LAYER_MARCH", invocation);
   const settings = readOptions(call, options, ACCEPTED);
-  const { wall, nu: viscosity, words } = readWall(call, { x, ue, nu, radius, wall_velocity: undefined }, settings);
+  const read = readWall(call, { x, ue, nu, radius, wall_velocity: undefined }, settings);
+  const { wall, nu: viscosity, words } = read;
   const turbulentMethod = readTurbulentMethod(call, settings);
+  if (turbulentMethod === "field") return turbulentFieldTable(call, read, settings, readOnset(call, settings));
   const made = marchOverSurface(wall, viscosity, {
     laminarMethod: (settings.word("laminar method") ?? "Thwaites") as LaminarMethodName,
     turbulentMethod,
@@ -94,9 +97,18 @@ export function layerMarch(x: any[][], ue: any[][], nu: any, options: any[][], r
   return layerTable(call, wall.edge, march.columns, { settings: `whole layer, ${words}; ${used}; starts ${from}`, remarks, beyond }, settings.columns());
 }
 
-function readTurbulentMethod(call: Call, options: Options): "lag" | "entrainment" {
-  const method = options.word("turbulent method") ?? "lag";
-  if (method === "field") throw cellError("#VALUE!", `${call.name} needs turbulent method = lag or entrainment; for the full equations use FIELD_MARCH with the same onset`);
+/** What the full equations cannot take together with an onset. */
+const NOT_BY_FIELD = ["trip momentum loss", "transition zone", "reference Mach"] as const;
+
+function readTurbulentMethod(call: Call, options: Options): "lag" | "entrainment" | "field" {
+  const method = (options.word("turbulent method") ?? "lag") as "lag" | "entrainment" | "field";
   if (method === "entrainment" && options.number("reference Mach")) throw cellError("#VALUE!", `${call.name} needs turbulent method = lag where reference Mach is given; entrainment is of constant density`);
-  return method as "lag" | "entrainment";
+  if (method !== "field") return method;
+  const laminar = options.word("laminar method") ?? "field";
+  if (laminar !== "field") throw cellError("#VALUE!", `${call.name} needs laminar method = field where the turbulent method is field; it has ${laminar}`);
+  for (const label of NOT_BY_FIELD) {
+    const word = options.word(label);
+    if (options.number(label) || (word !== undefined && word !== "none")) throw cellError("#VALUE!", `${call.name} needs turbulent method = lag where ${label} is given; it has field`);
+  }
+  return method;
 }

@@ -14,6 +14,8 @@ import { LEAST_TURBULENT_REYNOLDS } from "./layer-march";
 
 /** Reθ at which a layer told to be turbulent from a leading edge becomes so; a profile is needed to begin with. */
 const FROM_START_REYNOLDS = 100;
+/** Nodes and steps grow with the logarithm of Re; beyond this nothing is known of the model, and ships end at 1e10. */
+const MOST_REYNOLDS = 1e11;
 /** Share of the way from the last station to laminar separation at which turbulence sets in: the equations cannot be carried through separation itself. */
 const BEFORE_SEPARATION = 0.5;
 
@@ -32,6 +34,8 @@ export function fieldLayer(
 ): Outcome<{ march: LayerMarch }> {
   const { x, value } = wall.edge.curve;
   if (onset.kind === "fixed" && !(onset.x > x[0] && onset.x < x[x.length - 1])) return refuse("onset outside", { argument: "onset", values: { value: onset.x, least: x[0], most: x[x.length - 1] } });
+  const reynolds = (Math.max(...value) * (x[x.length - 1] - x[0])) / nu;
+  if (!(reynolds <= MOST_REYNOLDS)) return refuse("outside range", { argument: "Re of the wall", values: { value: reynolds, least: 0, most: MOST_REYNOLDS } });
   const laminar = fieldMarch(wall, nu, options);
   if (!laminar.ok) return laminar;
   const { stop } = laminar.march;

@@ -49,7 +49,8 @@ describe("LAYER_MARCH", () => {
     ["onset = free; trip momentum loss = 1", "needs onset = a station where trip momentum loss is given; it has free"],
     ["onset = 0.5; onset criterion = Michel", "needs onset = free where an onset criterion is given; it has 0.5"],
     ["onset criterion = Nobody", "nearest is Michel"],
-    ["turbulent method = field", "for the full equations use FIELD_MARCH with the same onset"],
+    ["turbulent method = field; laminar method = Thwaites", "needs laminar method = field where the turbulent method is field; it has Thwaites"],
+    ["turbulent method = field; transition zone = Dhawan-Narasimha", "needs turbulent method = lag where transition zone is given; it has field"],
     ["turbulent method = entrainment; reference Mach = 0.3; reference speed = 30", "needs turbulent method = lag where reference Mach is given"],
     ["onset = sideways", "from start"],
     ["transition zone = long", "Dhawan-Narasimha"],
@@ -74,6 +75,10 @@ describe("FIELD_MARCH with an onset", () => {
     expect(noteOf(table)).toContain("eddy viscosity of Cebeci and Smith from the onset");
     expect(stateOf(table).slice(0, 9).every((s) => s === "laminar")).toBe(true);
     expect(stateOf(table).at(-1)).toBe("turbulent");
+  });
+  it("is LAYER_MARCH with turbulent method = field, number for number", () => {
+    const table = fieldMarch(column(x), column(flat), 3e-6, "onset = 0.2; columns = θ, cf" as never, absent, absent, none);
+    expect(march(flat, "onset = 0.2; turbulent method = field; columns = θ, cf")).toEqual(table);
   });
   it("refuses flow through the wall and Richardson's extrapolation with it", () => {
     expect(() => fieldMarch(column(x), column(flat), 3e-6, "onset = 0.2" as never, absent, column(x.map(() => -0.01)) as never, none)).toThrow("needs a solid wall where an onset is given");
