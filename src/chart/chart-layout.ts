@@ -44,13 +44,12 @@ export interface ChartLayout {
   readonly markers: readonly PlacedMarker[];
 }
 
-/** Places everything of a chart in a box: words above the plot, marks of the axes beside and below it. */
-export function chartLayout(chart: Chart, width: number, height: number): ChartLayout {
+/** Places everything of a chart `width` pixels wide around a plot `plotHeight` high: words above it, marks of the axes beside and below. */
+export function chartLayout(chart: Chart, width: number, plotHeight: number): ChartLayout {
   const labelLines = wrapped(axisWords(chart.y), Math.floor((width - SIDE) / (CHARACTER * 1.05)));
   const legend = chart.series.length > 1 ? flow(chart.series.map((s) => s.label), width) : [];
   const legendRows = legend.length > 0 ? legend.at(-1)!.row + 1 : 0;
   const yValues = chart.series.flatMap((s) => s.values.filter((_, i) => canBeShown(chart.x.values[i], chart.x.scale)));
-  const bottom = height - 2 * ROW - 6;
   // How wide the marks' words are is settled by a first look at the values; the plot's height comes after.
   const first = axisFrame(yValues, chart.y.scale, [1, 0], 4);
   const left = Math.ceil(Math.max(...first.ticks.map((t) => t.words.length), 1) * CHARACTER) + TICK_LENGTH + 6;
@@ -58,8 +57,9 @@ export function chartLayout(chart: Chart, width: number, height: number): ChartL
   const markers = placeMarkers(chart.markers, x, width);
   const markerRows = markers.reduce((most, m) => Math.max(most, m.row + 1), 0);
   const top = (labelLines.length + legendRows + markerRows) * ROW + 8;
-  const y = axisFrame(yValues, chart.y.scale, [bottom, top], Math.max(2, Math.floor((bottom - top) / Y_TICK)));
-  return { width, height, plot: { left, top, right: width - SIDE, bottom }, x, y, labelLines, legend, markers };
+  const bottom = top + plotHeight;
+  const y = axisFrame(yValues, chart.y.scale, [bottom, top], Math.max(2, Math.floor(plotHeight / Y_TICK)));
+  return { width, height: bottom + 2 * ROW + 6, plot: { left, top, right: width - SIDE, bottom }, x, y, labelLines, legend, markers };
 }
 
 /** The row nearest to a pixel among those with a place on the x axis; −1 if there is none. */

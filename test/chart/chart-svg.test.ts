@@ -20,7 +20,7 @@ const chart: Chart = {
     { x: 0.35, words: "laminar separation 0.35" },
   ],
 };
-const drawn = (of: Chart, width = 296, height = 200) => svgText(chartSvg(of, chartLayout(of, width, height), "c"));
+const drawn = (of: Chart, width = 296) => svgText(chartSvg(of, chartLayout(of, width, 120), "c"));
 
 /** Elements of well-formed XML; throws where it is not. */
 function elements(xml: string): { name: string; attributes: Record<string, string>; text: string }[] {
@@ -40,7 +40,7 @@ test("a chart is well-formed XML with title, description, labels with units and 
   const text = (name: string) => all.filter((e) => e.name === name).map((e) => e.text);
   expect(text("title")).toEqual(["Thicknesses along the wall"]);
   expect(text("desc")).toEqual([chartSummary(chart)]);
-  for (const words of ["thickness [m]", "station x [m]", "momentum loss θ", "defect thickness δ*", "onset 0.12", "laminar separation 0.35", "0.0005"]) expect(text("text")).toContain(words);
+  for (const words of ["thickness [m]", "station x [m]", "momentum loss θ", "defect thickness δ*", "onset 0.12", "laminar separation 0.35", "0.0002", "0.0010"]) expect(text("text")).toContain(words);
   expect(all[0]!.attributes["aria-labelledby"]).toBe("c-title c-words");
 });
 
@@ -70,7 +70,7 @@ test("the summary names first, last, least and greatest values with their statio
 test("words stay inside the picture and off each other at every width from 240 to 900 px", () => {
   const crowded = { ...chart, markers: [...chart.markers, { x: 0.13, words: "laminar separation 0.13" }, { x: 0.14, words: "reattachment 0.14" }] };
   for (let width = 240; width <= 900; width += 20) {
-    const { markers, legend, plot } = chartLayout(crowded, width, 260);
+    const { markers, legend, plot } = chartLayout(crowded, width, 120);
     expect(markers).toHaveLength(4);
     for (const a of markers) {
       expect(a.from).toBeGreaterThanOrEqual(0);
@@ -81,18 +81,18 @@ test("words stay inside the picture and off each other at every width from 240 t
       }
     }
     for (const entry of legend) expect(entry.px + 34 + 6.2 * entry.words.length).toBeLessThanOrEqual(width);
-    expect(plot.bottom - plot.top).toBeGreaterThan(60);
+    expect(plot.bottom - plot.top).toBe(120);
   }
 });
 
 test("a marker outside the stations is told in words but not drawn", () => {
   const far = { ...chart, markers: [{ x: 9, words: "onset 9" }] };
-  expect(chartLayout(far, 296, 200).markers).toEqual([]);
+  expect(chartLayout(far, 296, 120).markers).toEqual([]);
   expect(chartSummary(far)).toContain("Onset 9.");
 });
 
 test("the row under the pointer is the nearest station; blank stations are passed over", () => {
-  const layout = chartLayout(chart, 296, 200);
+  const layout = chartLayout(chart, 296, 120);
   expect(nearestRow(layout, chart.x.values, layout.x.at(0.21))).toBe(2);
   expect(nearestRow(layout, [null, 0.1, null], 0)).toBe(1);
   expect(nearestRow(layout, [null], 0)).toBe(-1);
