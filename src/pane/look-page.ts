@@ -1,0 +1,132 @@
+import type { AxisScale } from "../chart/chart";
+import { chartSummary } from "../chart/chart-summary";
+import { blockAddress, type CellBlock } from "./cell-block";
+import { element } from "./element";
+import { errorWords } from "./error-words";
+import { calledFunctions } from "./form-formula";
+import { lookCharts } from "./look-charts";
+import { lookFiles, type Shown } from "./look-files";
+import { findings, tableHeadline } from "./look-findings";
+import { lookPanels } from "./look-panels";
+import { readLookTable } from "./look-source";
+import type { LookTable } from "./look-table";
+import type { SheetHost, WallCell } from "./sheet-host";
+import { valueTable } from "./value-table";
+
+export interface LookPage {
+  readonly root: HTMLElement;
+  /** Follows the selection and the cells; call when either changed and when the page is shown. */
+  update(): Promise<void>;
+}
+
+const ALL = "all, one below the other";
+
+/**
+ * The table of the selected WALL cell as charts, with readings, notes, files and words. While the selection stands on anything else
+ * the last table stays and follows its inputs, so that a change to an input is seen at once.
+ */
+export function lookPage(host: SheetHost, say: (sentence: string, isFault?: boolean) => void): LookPage {
+  const headline = element("p", { class: "wl-headline", "aria-live": "polite" });
+  const formula = element("p", { class: "wl-formula" });
+  const notes = element("div", {});
+  const choice = element("select", { id: "wl-panels" });
+  const logX = element("input", { id: "wl-log-x", type: "checkbox" });
+  const logY = element("input", { id: "wl-log-y", type: "checkbox" });
+  const charts = lookCharts();
+  const words = element("ul", { class: "wl-notes" });
+  const wordsBox = element("details", {}, element("summary", {}, "The charts in words"), words);
+  const values = element("div", {});
+  const files = lookFiles(host, () => shown, say);
+  const drawing = element(
+    "div",
+    { class: "wl-drawing" },
+    element("div", { class: "wl-field wl-choice" }, element("label", { for: "wl-panels" }, "Show"), choice),
+    element("div", { class: "wl-field wl-scales" }, element("label", {}, logX, " log stations"), element("label", {}, logY, " log values")),
+    charts.root,
+    wordsBox,
+    element("details", {}, element("summary", {}, "The table"), values),
+    files,
+  );
+  const others = element("div", {});
+  const root = element("div", { class: "wl-look" }, headline, formula, notes, others, drawing);
+
+  let looked: CellBlock | undefined;
+  let table: LookTable | undefined;
+  let shown: Shown | undefined;
+  let key = "";
+  let turn = 0;
+
+  async function update(): Promise<void> {
+    const mine = ++turn;
+    const selected = await host.tableAt(await host.selection());
+    const cell = selected ?? (looked ? await host.tableAt(looked) : undefined);
+    const read = cell && !cell.error ? await readLookTable(host, cell) : undefined;
+    const tables = cell ? [] : (await host.wallCells()).filter((c) => c.spill.bottom > c.spill.top);
+    if (mine !== turn) return; // a later change is being read already
+    const next = JSON.stringify([cell, read, tables]);
+    if (next === key) return;
+    key = next;
+    looked = cell?.at;
+    table = read;
+    if (cell) showCell(cell);
+    else showTables(tables);
+  }
+
+  function showCell(cell: WallCell): void {
+    const name = calledFunctions(cell.formula)[0] ?? "WALL";
+    const address = blockAddress(cell.at, cell.at.sheet);
+    formula.textContent = cell.formula;
+    formula.hidden = false;
+    others.replaceChildren();
+    drawing.hidden = table === undefined;
+    headline.classList.toggle("wl-fault", cell.error !== undefined);
+    if (cell.error) setText(headline, `${name} in ${address} gives no table. ${errorWords(cell.error)}`);
+    else if (table) setText(headline, tableHeadline(name, address, table));
+    else setText(headline, `${name} in ${address} gives a value or a list of results: there are no columns to draw.`);
+    notes.replaceChildren(...(table ? findings(table) : []));
+    if (table) draw(table, `${name.toLowerCase().replaceAll("_", "-")}-${address}`);
+    else shown = undefined;
+  }
+
+  function draw(of: LookTable, name: string): void {
+    const scale = (box: HTMLInputElement): AxisScale => (box.checked ? "log" : "linear");
+    const panels = lookPanels(of, { x: scale(logX), y: scale(logY) });
+    const wanted = choice.value;
+    const names = panels.length > 1 ? [ALL, ...panels.map((p) => p.name)] : panels.map((p) => p.name);
+    choice.replaceChildren(...names.map((n) => element("option", { value: n }, n)));
+    choice.value = names.includes(wanted) ? wanted : names[0]!;
+    const chosen = choice.value === ALL ? panels : panels.filter((p) => p.name === choice.value);
+    shown = { name, table: of, panels: chosen };
+    charts.show(of, chosen);
+    words.replaceChildren(...chosen.map((p) => element("li", {}, chartSummary(p.chart))));
+    values.replaceChildren(valueTable(of));
+  }
+
+  function showTables(tables: readonly WallCell[]): void {
+    shown = undefined;
+    drawing.hidden = true;
+    formula.hidden = true;
+    headline.classList.remove("wl-fault");
+    notes.replaceChildren();
+    setText(headline, tables.length > 0 ? "Select a cell of a WALL table, or choose one of this book:" : "There is no WALL table in this book yet. Insert a function under Find; its table is drawn here.");
+    others.replaceChildren(
+      ...tables.map((cell) =>
+        element("button", { type: "button", class: "wl-entry", click: () => void host.goTo(cell.at).catch((error: unknown) => say(String(error), true)) }, element("span", { class: "wl-name" }, calledFunctions(cell.formula)[0] ?? "WALL"), element("span", { class: "wl-purpose" }, blockAddress(cell.at))),
+      ),
+    );
+  }
+
+  for (const control of [choice, logX, logY]) {
+    control.addEventListener("change", () => {
+      if (!table || !shown) return;
+      draw(table, shown.name);
+      if (control === choice && shown.panels.length === 1) say(chartSummary(shown.panels[0]!.chart));
+    });
+  }
+  return { root, update };
+}
+
+/** A live region speaks again only when its words change. */
+function setText(region: HTMLElement, words: string): void {
+  if (region.textContent !== words) region.textContent = words;
+}
