@@ -34,7 +34,7 @@ function place(x: ChartAxis, value: number): string {
 
 /** A number with its unit behind it; a pure number alone. */
 export function withUnit(number: string, unit: string): string {
-  return unit === "" || unit === "1" || unit === "–" ? number : `${number} ${unit}`;
+  return unit === "" || unit === "1" ? number : `${number} ${unit}`;
 }
 
 function saysPlace(words: string, x: number): boolean {

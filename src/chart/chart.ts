@@ -6,6 +6,8 @@ export interface ChartAxis {
   readonly label: string;
   /** `m`, `m/s`, `1`; empty when there is nothing to say. */
   readonly unit: string;
+  /** Kind of quantity (`length`), for the label alone where the unit is not known. */
+  readonly kind?: string;
   readonly scale: AxisScale;
 }
 
@@ -30,7 +32,8 @@ export interface Chart {
   readonly markers: readonly ChartMarker[];
 }
 
-/** `momentum loss θ [m]`; a pure number has no bracket. */
-export function axisWords(axis: { readonly label: string; readonly unit: string }): string {
-  return axis.unit === "" || axis.unit === "1" ? axis.label : `${axis.label} [${axis.unit}]`;
+/** `momentum loss θ [m]`, or `[length]` where the unit is not known; a pure number has no bracket. */
+export function axisWords(axis: { readonly label: string; readonly unit: string; readonly kind?: string }): string {
+  const bracket = axis.unit === "" ? (axis.kind ?? "") : axis.unit === "1" ? "" : axis.unit;
+  return bracket === "" ? axis.label : `${axis.label} [${bracket}]`;
 }

@@ -24,16 +24,16 @@ const PURE = ["–", "-", "1", "[-]", "[–]"];
 const LEAST_SHARE = 0.5;
 
 /**
- * The unit of each column: from the row of cells above the headings where most columns of numbers have a unit there, otherwise the
- * kind of quantity in words (`length`); "1" for a pure number, "" where nothing is known.
+ * The unit of each column: from the row of cells above the headings where most columns of numbers have a unit there, otherwise no
+ * unit but the kind of quantity (`length`) where the heading tells it. The unit of a pure number is "1".
  */
-export function columnUnits(columns: readonly { readonly key: string | undefined; readonly isNumeric: boolean }[], above: readonly string[]): string[] {
+export function columnUnits(columns: readonly { readonly key: string | undefined; readonly isNumeric: boolean }[], above: readonly string[]): { unit: string; kind: string }[] {
   const written = columns.map((column, i) => (column.isNumeric && UNIT.test((above[i] ?? "").trim()) ? above[i]!.trim().replace(/^\[(.+)\]$/, "$1") : ""));
   const numeric = columns.filter((column) => column.isNumeric).length;
   const isUnitRow = numeric > 0 && written.filter((unit) => unit !== "").length >= LEAST_SHARE * numeric && written.some((unit) => !PURE.includes(unit));
   return columns.map((column, i) => {
-    if (isUnitRow && written[i] !== "") return PURE.includes(written[i]!) ? "1" : written[i]!;
-    if (!column.isNumeric || column.key === undefined) return "";
-    return KIND[column.key as HeadingKey] ?? "1";
+    const kind = (column.isNumeric && KIND[column.key as HeadingKey]) || "";
+    const unit = isUnitRow ? written[i]! : "";
+    return { unit: PURE.includes(unit) ? "1" : unit, kind };
   });
 }

@@ -22,7 +22,7 @@ const LEAST_WIDTH = 240;
 /** The charts one below the other with one station read off all of them: by a slider, or by the pointer over any chart. */
 export function lookCharts(): LookCharts {
   const slider = element("input", { id: "wl-station", type: "range", min: "1", step: "1" });
-  const place = element("output", { for: "wl-station", class: "wl-station-words" });
+  const place = element("p", { class: "wl-station-words" });
   const figures = element("div", { class: "wl-figures" });
   const root = element("div", {}, element("div", { class: "wl-reader" }, element("label", { for: "wl-station" }, "Station"), slider, place), figures);
   let table: LookTable | undefined;

@@ -17,8 +17,8 @@ export interface Shown {
   readonly panels: readonly LookPanel[];
 }
 
-/** Width and plot height of a picture that leaves the pane: a page's column. */
-const WIDTH = 720;
+/** Width and plot height of a chart that leaves the pane; with its margins it fills a page's column of 720 px. */
+const WIDTH = 696;
 const PLOT_HEIGHT = 220;
 
 type Say = (sentence: string, isFault?: boolean) => void;

@@ -6,7 +6,7 @@ import { errorWords } from "./error-words";
 import { calledFunctions } from "./form-formula";
 import { lookCharts } from "./look-charts";
 import { lookFiles, type Shown } from "./look-files";
-import { findings, tableHeadline } from "./look-findings";
+import { findings, tableHeadline, warnings } from "./look-findings";
 import { lookPanels } from "./look-panels";
 import { readLookTable } from "./look-source";
 import type { LookTable } from "./look-table";
@@ -26,8 +26,10 @@ const ALL = "all, one below the other";
  * the last table stays and follows its inputs, so that a change to an input is seen at once.
  */
 export function lookPage(host: SheetHost, say: (sentence: string, isFault?: boolean) => void): LookPage {
-  const headline = element("p", { class: "wl-headline", "aria-live": "polite" });
+  const title = element("h2", {});
+  const headline = element("p", { class: "wl-headline" });
   const formula = element("p", { class: "wl-formula" });
+  const alerts = element("div", {});
   const notes = element("div", {});
   const choice = element("select", { id: "wl-panels" });
   const logX = element("input", { id: "wl-log-x", type: "checkbox" });
@@ -43,12 +45,13 @@ export function lookPage(host: SheetHost, say: (sentence: string, isFault?: bool
     element("div", { class: "wl-field wl-choice" }, element("label", { for: "wl-panels" }, "Show"), choice),
     element("div", { class: "wl-field wl-scales" }, element("label", {}, logX, " log stations"), element("label", {}, logY, " log values")),
     charts.root,
+    element("section", { "aria-label": "Notes of the table" }, element("h3", {}, "Notes of the table"), notes),
     wordsBox,
     element("details", {}, element("summary", {}, "The table"), values),
     files,
   );
   const others = element("div", {});
-  const root = element("div", { class: "wl-look" }, headline, formula, notes, others, drawing);
+  const root = element("div", { class: "wl-look" }, element("div", { "aria-live": "polite" }, title, headline, alerts), others, drawing, formula);
 
   let looked: CellBlock | undefined;
   let table: LookTable | undefined;
@@ -80,10 +83,14 @@ export function lookPage(host: SheetHost, say: (sentence: string, isFault?: bool
     others.replaceChildren();
     drawing.hidden = table === undefined;
     headline.classList.toggle("wl-fault", cell.error !== undefined);
-    if (cell.error) setText(headline, `${name} in ${address} gives no table. ${errorWords(cell.error)}`);
-    else if (table) setText(headline, tableHeadline(name, address, table));
-    else setText(headline, `${name} in ${address} gives a value or a list of results: there are no columns to draw.`);
-    notes.replaceChildren(...(table ? findings(table) : []));
+    setText(title, `${name} in ${address}`);
+    if (cell.error) setText(headline, errorWords(cell.error));
+    else if (table) setText(headline, tableHeadline(table));
+    else setText(headline, "A value or a list of results: there are no columns to draw.");
+    if (table) {
+      alerts.replaceChildren(findings(warnings(table), table) ?? "");
+      notes.replaceChildren(findings(table.notes, table) ?? element("p", { class: "wl-quiet" }, "none"));
+    } else alerts.replaceChildren();
     if (table) draw(table, `${name.toLowerCase().replaceAll("_", "-")}-${address}`);
     else shown = undefined;
   }
@@ -107,7 +114,8 @@ export function lookPage(host: SheetHost, say: (sentence: string, isFault?: bool
     drawing.hidden = true;
     formula.hidden = true;
     headline.classList.remove("wl-fault");
-    notes.replaceChildren();
+    alerts.replaceChildren();
+    setText(title, "Look at a table");
     setText(headline, tables.length > 0 ? "Select a cell of a WALL table, or choose one of this book:" : "There is no WALL table in this book yet. Insert a function under Find; its table is drawn here.");
     others.replaceChildren(
       ...tables.map((cell) =>

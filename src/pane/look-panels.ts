@@ -25,14 +25,15 @@ export function lookPanels(table: LookTable, scales: { readonly x: AxisScale; re
   }
   const usable = (wanted: AxisScale, values: readonly (number | null)[]): AxisScale => (wanted === "log" && values.some((v) => canBeShown(v, "log")) ? "log" : "linear");
   return groups.map((columns) => {
-    const units = new Set(columns.map((c) => c.unit));
-    const label = columns.length === 1 ? columns[0]!.heading : "thickness";
+    const [first, ...rest] = columns as [LookColumn, ...LookColumn[]];
+    const same = rest.every((c) => c.unit === first.unit);
+    const label = rest.length === 0 ? first.heading : "thickness";
     return {
       name: columns.map((c) => c.heading).join(", "),
       chart: {
         title: `${columns.map((c) => c.heading).join(" and ")} over ${table.x.heading}`,
-        x: { label: table.x.heading, unit: table.x.unit, scale: usable(scales.x, table.x.values), values: table.x.values },
-        y: { label, unit: units.size === 1 ? columns[0]!.unit : "", scale: usable(scales.y, columns.flatMap((c) => c.values)) },
+        x: { label: table.x.heading, unit: table.x.unit, kind: table.x.kind, scale: usable(scales.x, table.x.values), values: table.x.values },
+        y: { label, unit: same ? first.unit : "", kind: first.kind, scale: usable(scales.y, columns.flatMap((c) => c.values)) },
         series: columns.map((c) => ({ label: c.heading, values: c.values })),
         markers: table.markers,
       },

@@ -1,4 +1,4 @@
-import type { ChartMarker } from "../chart/chart";
+import { axisWords, type ChartMarker } from "../chart/chart";
 import { findHeading } from "../cells/writing/headings";
 import { columnUnits } from "./column-units";
 import { layerMarkers } from "./layer-markers";
@@ -9,6 +9,8 @@ export interface LookColumn {
   readonly key: string | undefined;
   readonly heading: string;
   readonly unit: string;
+  /** Kind of quantity, for labels where the unit is not known. */
+  readonly kind: string;
   /** Blank is null. */
   readonly values: readonly (number | null)[];
 }
@@ -50,23 +52,23 @@ export function lookTable(block: readonly (readonly HostCell[])[], above: readon
   // A column of names in front makes it a list of results, not a table over stations.
   if (!read.some((c) => c.isNumeric) || (!read[0]!.isNumeric && !WORDS.includes(read[0]!.key ?? "") && read[0]!.values.some((v) => typeof v === "string" && v !== ""))) return undefined;
   const units = columnUnits(read, hasHeadings ? above : []);
-  const numeric = read.flatMap((c, i) => (c.isNumeric ? [{ key: c.key, heading: c.heading, unit: units[i]!, values: c.values.map((v) => (typeof v === "number" ? v : null)) }] : []));
+  const numeric = read.flatMap((c, i) => (c.isNumeric ? [{ key: c.key, heading: c.heading, ...units[i]!, values: c.values.map((v) => (typeof v === "number" ? v : null)) }] : []));
   const x = stationsOf(numeric, rows.length, stations);
   const columns = numeric.filter((c) => c !== x);
   if (columns.length === 0) return undefined;
   const texts = (key: string) => read.find((c) => c.key === key && !c.isNumeric)?.values.map((v) => (typeof v === "string" ? v : "")) ?? [];
   const states = texts("state");
   const notes = texts("note").flatMap((words, i) => (words === "" ? [] : [{ row: i + 1, words }]));
-  return { x, columns, rows: rows.length, states, notes, markers: layerMarkers(x, states, notes), headings: read.map((c, i) => (units[i] === "" || units[i] === "1" ? c.heading : `${c.heading} [${units[i]}]`)), cells: rows.map((row) => Array.from({ length: width }, (_, c) => row[c]?.value ?? null)) };
+  return { x, columns, rows: rows.length, states, notes, markers: layerMarkers(x, states, notes), headings: read.map((c, i) => axisWords({ label: c.heading, unit: units[i]!.unit })), cells: rows.map((row) => Array.from({ length: width }, (_, c) => row[c]?.value ?? null)) };
 }
 
 function stationsOf(columns: readonly LookColumn[], rows: number, stations: readonly number[] | undefined): LookColumn {
   const named = PLACES.map((key) => columns.find((c) => c.key === key)).find((c) => c !== undefined);
   if (named) return named;
-  if (stations?.length === rows) return { key: "station", heading: "station x", unit: "length", values: stations };
+  if (stations?.length === rows) return { key: "station", heading: "station x", unit: "", kind: "length", values: stations };
   const first = columns[0]!;
   if (columns.length > 1 && first.values.every((v, i) => v !== null && (i === 0 || v > first.values[i - 1]!))) return first;
-  return { key: undefined, heading: "row of the table", unit: "1", values: Array.from({ length: rows }, (_, i) => i + 1) };
+  return { key: undefined, heading: "row of the table", unit: "1", kind: "", values: Array.from({ length: rows }, (_, i) => i + 1) };
 }
 
 function bareHeading(above: string | undefined, column: number, width: number): string {

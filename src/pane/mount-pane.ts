@@ -39,6 +39,7 @@ export function mountPane(root: HTMLElement, host: SheetHost, catalogue: readonl
       else tab.removeAttribute("aria-current");
     }
     say("");
+    cell.root.hidden = name === "Look"; // it tells its table itself
     pages[name]();
     body.scrollTop = 0;
     if (name === "Look") look.update().catch(complain);

@@ -6,7 +6,7 @@ import type { LookTable } from "./look-table";
 /** The drawn columns as a table to four digits, in a box that scrolls by itself. */
 export function valueTable(table: LookTable): HTMLElement {
   const columns = [table.x, ...table.columns];
-  const head = element("tr", {}, ...columns.map((c) => element("th", { scope: "col" }, axisWords({ label: c.heading, unit: c.unit }))), ...(table.states.length > 0 ? [element("th", { scope: "col" }, "state")] : []));
+  const head = element("tr", {}, ...columns.map((c) => element("th", { scope: "col" }, axisWords({ label: c.heading, unit: c.unit, kind: c.kind }))), ...(table.states.length > 0 ? [element("th", { scope: "col" }, "state")] : []));
   const rows = Array.from({ length: table.rows }, (_, i) =>
     element("tr", {}, ...columns.map((c) => element("td", {}, c.values[i] === null || c.values[i] === undefined ? "" : numberWords(c.values[i]))), ...(table.states.length > 0 ? [element("td", {}, table.states[i]!)] : [])),
   );

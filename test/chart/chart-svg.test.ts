@@ -107,6 +107,6 @@ test("a chart without a value still draws its frame and says so", () => {
 test("charts in one picture stand one below the other", () => {
   const one = svg("svg", { width: 100, height: 50 });
   const all = elements(svgText(chartColumn([one, one], 10)));
-  expect(all[0]!.attributes).toMatchObject({ width: "100", height: "110", xmlns: "http://www.w3.org/2000/svg" });
-  expect(all.slice(2).map((e) => e.attributes.y)).toEqual(["0", "60"]);
+  expect(all[0]!.attributes).toMatchObject({ width: "120", height: "130", xmlns: "http://www.w3.org/2000/svg" });
+  expect(all.slice(2).map((e) => e.attributes.y)).toEqual(["10", "70"]);
 });

@@ -26,7 +26,7 @@ test("a layer's table gives its columns over the stations, blanks as null, its s
 test("the thicknesses are drawn together, every other column by itself, each with its unit and the markers", () => {
   const panels = lookPanels(lookTable(block(LAYER), ["m", "m/s", "m", "m", "–"], undefined)!, { x: "linear", y: "log" });
   expect(panels.map((p) => p.name)).toEqual(["edge speed ue", "momentum loss θ, defect thickness δ*", "shape factor H"]);
-  expect(panels[1]!.chart.y).toEqual({ label: "thickness", unit: "m", scale: "log" });
+  expect(panels[1]!.chart.y).toEqual({ label: "thickness", unit: "m", kind: "length", scale: "log" });
   expect(panels[1]!.chart.series.map((s) => s.label)).toEqual(["momentum loss θ", "defect thickness δ*"]);
   expect(panels.every((p) => p.chart.markers.length === 1)).toBe(true);
 });
@@ -59,11 +59,11 @@ test("a profile is drawn over its height, and a table without stations over its 
 
 test("units come from the row above only where it holds units; otherwise the kind of quantity is named", () => {
   const columns = [{ key: "station", isNumeric: true }, { key: "momentum_loss", isNumeric: true }, { key: "shape", isNumeric: true }, { key: "note", isNumeric: false }];
-  expect(columnUnits(columns, ["mm", "[µm]", "–", ""])).toEqual(["mm", "µm", "1", ""]);
-  expect(columnUnits(columns, ["Run 3, wind tunnel, Tuesday", "", "", ""])).toEqual(["length", "length", "1", ""]);
-  expect(columnUnits(columns, ["layer", "", "", ""])).toEqual(["length", "length", "1", ""]);
-  expect(columnUnits(columns, [])).toEqual(["length", "length", "1", ""]);
-  expect(columnUnits([{ key: undefined, isNumeric: true }], [])).toEqual([""]);
+  expect(columnUnits(columns, ["mm", "[µm]", "–", ""]).map((c) => c.unit)).toEqual(["mm", "µm", "1", ""]);
+  for (const above of [["Run 3, wind tunnel, Tuesday", "", "", ""], ["layer", "", "", ""], []]) {
+    expect(columnUnits(columns, above)).toEqual([{ unit: "", kind: "length" }, { unit: "", kind: "length" }, { unit: "", kind: "" }, { unit: "", kind: "" }]);
+  }
+  expect(columnUnits([{ key: undefined, isNumeric: true }], [])).toEqual([{ unit: "", kind: "" }]);
 });
 
 test("onset, bubble and separation of a whole layer are marked in order, each once", () => {
