@@ -32,9 +32,9 @@ function place(x: ChartAxis, value: number): string {
   return `${x.label} ${withUnit(numberWords(value), x.unit)}`;
 }
 
-/** A number with its unit behind it; a pure number alone. */
+/** A number with its unit behind it, never parted by the end of a line; a pure number alone. */
 export function withUnit(number: string, unit: string): string {
-  return unit === "" || unit === "1" ? number : `${number} ${unit}`;
+  return unit === "" || unit === "1" ? number : `${number}\u00a0${unit}`;
 }
 
 function saysPlace(words: string, x: number): boolean {

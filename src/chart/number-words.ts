@@ -1,7 +1,7 @@
 /** Digits a reading shows: more than any method here is good for, fewer than the eye gets lost in. */
 const SIGNIFICANT = 4;
 /** Within these a plain number reads better than a power of ten. */
-const LEAST_PLAIN = 1e-4;
+const LEAST_PLAIN = 1e-5;
 const GREATEST_PLAIN = 1e7;
 /** Decimals after which the marks of an axis are powers of ten. */
 const MOST_DECIMALS = 6;
@@ -31,7 +31,7 @@ export function tickWords(values: readonly number[], step: number): string[] {
 
 /** The marks of a log axis: each a plain number while it reads well, `10⁷` and the like beyond. */
 export function logTickWords(values: readonly number[]): string[] {
-  return values.map((v) => (v < 1e-5 || v >= GREATEST_PLAIN ? powerWords(v) : plain(v)));
+  return values.map((v) => (v < LEAST_PLAIN || v >= GREATEST_PLAIN ? powerWords(v) : plain(v)));
 }
 
 function plain(value: number): string {

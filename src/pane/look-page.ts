@@ -25,7 +25,7 @@ const ALL = "all, one below the other";
  * The table of the selected WALL cell as charts, with readings, notes, files and words. While the selection stands on anything else
  * the last table stays and follows its inputs, so that a change to an input is seen at once.
  */
-export function lookPage(host: SheetHost, say: (sentence: string, isFault?: boolean) => void): LookPage {
+export function lookPage(host: SheetHost, about: (name: string) => void, say: (sentence: string, isFault?: boolean) => void): LookPage {
   const title = element("h2", {});
   const headline = element("p", { class: "wl-headline" });
   const formula = element("p", { class: "wl-formula" });
@@ -35,7 +35,7 @@ export function lookPage(host: SheetHost, say: (sentence: string, isFault?: bool
   const logX = element("input", { id: "wl-log-x", type: "checkbox" });
   const logY = element("input", { id: "wl-log-y", type: "checkbox" });
   const charts = lookCharts();
-  const words = element("ul", { class: "wl-notes" });
+  const words = element("ul", { class: "wl-notes", "aria-live": "polite" });
   const wordsBox = element("details", {}, element("summary", {}, "The charts in words"), words);
   const values = element("div", {});
   const files = lookFiles(host, () => shown, say);
@@ -50,8 +50,10 @@ export function lookPage(host: SheetHost, say: (sentence: string, isFault?: bool
     element("details", {}, element("summary", {}, "The table"), values),
     files,
   );
+  const abouts = element("div", { class: "wl-files" });
+  const source = element("section", { "aria-label": "Formula" }, element("h3", {}, "Formula"), formula, abouts);
   const others = element("div", {});
-  const root = element("div", { class: "wl-look" }, element("div", { "aria-live": "polite" }, title, headline, alerts), others, drawing, formula);
+  const root = element("div", { class: "wl-look" }, element("div", { "aria-live": "polite" }, title, headline, alerts), others, drawing, source);
 
   let looked: CellBlock | undefined;
   let table: LookTable | undefined;
@@ -69,6 +71,7 @@ export function lookPage(host: SheetHost, say: (sentence: string, isFault?: bool
     const next = JSON.stringify([cell, read, tables]);
     if (next === key) return;
     key = next;
+    if (JSON.stringify(looked) !== JSON.stringify(cell?.at)) say("");
     looked = cell?.at;
     table = read;
     if (cell) showCell(cell);
@@ -76,10 +79,12 @@ export function lookPage(host: SheetHost, say: (sentence: string, isFault?: bool
   }
 
   function showCell(cell: WallCell): void {
-    const name = calledFunctions(cell.formula)[0] ?? "WALL";
+    const names = calledFunctions(cell.formula);
+    const name = names.join(" and ");
     const address = blockAddress(cell.at, cell.at.sheet);
     formula.textContent = cell.formula;
-    formula.hidden = false;
+    source.hidden = false;
+    abouts.replaceChildren(...names.map((n) => element("button", { type: "button", class: "wl-minor", click: () => about(n) }, `About ${n}`)));
     others.replaceChildren();
     drawing.hidden = table === undefined;
     headline.classList.toggle("wl-fault", cell.error !== undefined);
@@ -91,7 +96,7 @@ export function lookPage(host: SheetHost, say: (sentence: string, isFault?: bool
       alerts.replaceChildren(findings(warnings(table), table) ?? "");
       notes.replaceChildren(findings(table.notes, table) ?? element("p", { class: "wl-quiet" }, "none"));
     } else alerts.replaceChildren();
-    if (table) draw(table, `${name.toLowerCase().replaceAll("_", "-")}-${address}`);
+    if (table) draw(table, `${names.join("-").toLowerCase().replaceAll("_", "-")}-${address}`);
     else shown = undefined;
   }
 
@@ -112,14 +117,14 @@ export function lookPage(host: SheetHost, say: (sentence: string, isFault?: bool
   function showTables(tables: readonly WallCell[]): void {
     shown = undefined;
     drawing.hidden = true;
-    formula.hidden = true;
+    source.hidden = true;
     headline.classList.remove("wl-fault");
     alerts.replaceChildren();
     setText(title, "Look at a table");
     setText(headline, tables.length > 0 ? "Select a cell of a WALL table, or choose one of this book:" : "There is no WALL table in this book yet. Insert a function under Find; its table is drawn here.");
     others.replaceChildren(
       ...tables.map((cell) =>
-        element("button", { type: "button", class: "wl-entry", click: () => void host.goTo(cell.at).catch((error: unknown) => say(String(error), true)) }, element("span", { class: "wl-name" }, calledFunctions(cell.formula)[0] ?? "WALL"), element("span", { class: "wl-purpose" }, blockAddress(cell.at))),
+        element("button", { type: "button", class: "wl-entry", click: () => void host.goTo(cell.at).catch((error: unknown) => say(String(error), true)) }, element("span", { class: "wl-name" }, calledFunctions(cell.formula).join(" and ")), element("span", { class: "wl-purpose" }, blockAddress(cell.at))),
       ),
     );
   }
@@ -127,8 +132,9 @@ export function lookPage(host: SheetHost, say: (sentence: string, isFault?: bool
   for (const control of [choice, logX, logY]) {
     control.addEventListener("change", () => {
       if (!table || !shown) return;
+      // One chart chosen: its words are opened, and so spoken.
+      if (control === choice) wordsBox.open = choice.value !== ALL;
       draw(table, shown.name);
-      if (control === choice && shown.panels.length === 1) say(chartSummary(shown.panels[0]!.chart));
     });
   }
   return { root, update };

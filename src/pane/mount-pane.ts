@@ -28,7 +28,12 @@ export function mountPane(root: HTMLElement, host: SheetHost, catalogue: readonl
   const list = functionList(catalogue, (entry) => showCard(entry), say);
   const cell = selectedCell(catalogue, host, (entry) => showCard(entry));
 
-  const look = lookPage(host, say);
+  const openByName = (name: string) => {
+    const entry = catalogue.find((e) => e.name === name);
+    if (entry) showCard(entry);
+    else showList();
+  };
+  const look = lookPage(host, openByName, say);
   const pages = { Find: () => body.replaceChildren(card?.root ?? list.root), Look: () => body.replaceChildren(look.root) };
   let page: keyof typeof pages = "Find";
   const tabs = (Object.keys(pages) as (keyof typeof pages)[]).map((name) => element("button", { type: "button", class: "wl-tab", click: () => turnTo(name) }, name));
@@ -76,11 +81,7 @@ export function mountPane(root: HTMLElement, host: SheetHost, catalogue: readonl
   const stop = host.whenChanged(update);
   update();
   return {
-    open(name) {
-      const entry = catalogue.find((e) => e.name === name);
-      if (entry) showCard(entry);
-      else showList();
-    },
+    open: openByName,
     close() {
       stop();
       root.replaceChildren();
