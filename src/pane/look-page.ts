@@ -60,6 +60,8 @@ export function lookPage(host: SheetHost, about: (name: string) => void, say: (s
   let shown: Shown | undefined;
   let key = "";
   let turn = 0;
+  /** As the user chose it; a table that has no such chart shows all. */
+  let wanted = ALL;
 
   async function update(): Promise<void> {
     const mine = ++turn;
@@ -103,7 +105,6 @@ export function lookPage(host: SheetHost, about: (name: string) => void, say: (s
   function draw(of: LookTable, name: string): void {
     const scale = (box: HTMLInputElement): AxisScale => (box.checked ? "log" : "linear");
     const panels = lookPanels(of, { x: scale(logX), y: scale(logY) });
-    const wanted = choice.value;
     const names = panels.length > 1 ? [ALL, ...panels.map((p) => p.name)] : panels.map((p) => p.name);
     choice.replaceChildren(...names.map((n) => element("option", { value: n }, n)));
     choice.value = names.includes(wanted) ? wanted : names[0]!;
@@ -132,6 +133,7 @@ export function lookPage(host: SheetHost, about: (name: string) => void, say: (s
   for (const control of [choice, logX, logY]) {
     control.addEventListener("change", () => {
       if (!table || !shown) return;
+      wanted = choice.value;
       // One chart chosen: its words are opened, and so spoken.
       if (control === choice) wordsBox.open = choice.value !== ALL;
       draw(table, shown.name);

@@ -221,6 +221,22 @@ test("an error is told in words, a list of results is not drawn, and a bare colu
   await pane().getByRole("heading", { name: "COLUMN_OF and WALL_BLOW_VELOCITY in N19" }).waitFor();
 });
 
+test("onset, bubble and separation of a whole layer are marked, its warnings stand above the charts, and their words keep apart", async () => {
+  for (const [formula, marked, warned] of [
+    ["=WALL.LAYER_MARCH(A19:A33,B19:B33,0.000001)", /Marked: .*onset 0\.\d+/, undefined],
+    ["=WALL.LAYER_MARCH({0;0.1;0.2;0.3;0.4;0.5;0.6;0.8;1},{10;10;10;9.6;9.2;8.9;8.7;8.5;8.4},0.00001)", /Marked: laminar separation 0\.\d+; reattachment 0\.\d+; onset 0\.\d+/, /Warning: bubble/],
+  ] as const) {
+    await write(14, 40, formula);
+    await select(14, 40);
+    await pane().locator(".wl-headline").getByText(marked).waitFor();
+    assert.equal(await pane().locator(".wl-look > div[aria-live] .wl-warning").filter({ hasText: warned ?? /./ }).count(), warned ? 1 : 0);
+    await picture(warned ? "bubble" : "onset");
+    assert.deepEqual(await wordFaults(), []);
+    assert.deepEqual(await violations(), []);
+  }
+  await write(14, 40, "");
+});
+
 test("every control is reached by Tab in reading order, with its focus to be seen", async () => {
   await select(MARCH.col, MARCH.row);
   await pane().getByRole("heading", { name: "THWAITES_MARCH in D18" }).waitFor();
@@ -259,8 +275,8 @@ test("at 320 px and at twice the zoom nothing is cut off or scrolls sideways", a
   await page.setViewportSize({ width: 1280, height: 720 });
 });
 
-test("words stand inside every chart and no two words of a chart overlap", async () => {
-  const faults = await page.evaluate(() =>
+function wordFaults(): Promise<string[]> {
+  return page.evaluate(() =>
     [...document.querySelectorAll(".wall-chart")].flatMap((chart) => {
       const frame = chart.getBoundingClientRect();
       const words = [...chart.querySelectorAll("text")].map((t) => ({ text: t.textContent, box: t.getBoundingClientRect() }));
@@ -269,7 +285,10 @@ test("words stand inside every chart and no two words of a chart overlap", async
       return [...outside, ...over];
     }),
   );
-  assert.deepEqual(faults, []);
+}
+
+test("words stand inside every chart and no two words of a chart overlap", async () => {
+  assert.deepEqual(await wordFaults(), []);
 });
 
 test("no request went to any other host, nothing failed, and the console is quiet", () => {
