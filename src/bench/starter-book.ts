@@ -1,6 +1,8 @@
 import { CAUTIONS } from "../cells/cautions";
 import { readAddress, type CellBlock } from "../pane/cell-block";
 import { chartFigure } from "./chart-figure";
+import { gliderDrag } from "./glider-drag";
+import { hullPlate } from "./hull-plate";
 import { threeMarches } from "./three-marches";
 
 /**
@@ -43,7 +45,8 @@ const STYLES = {
   8: { bold: true, verticalAlign: "bottom" },
   7: { bold: true, align: "right", wrapping: "wrap", verticalAlign: "bottom" },
 } as const;
-const FORMATS = { 1: "0.000", 2: "0.00", 3: "0.00e", 4: "0.00e", 5: "0.00e", 6: "0.000" } as const;
+const FORMATS = { 1: "0.000", 2: "0.00", 3: "0.00e", 4: "0.00e", 5: "0.00e", 6: "0.000", 7: "0.000000" } as const;
+const LOOK = { title: 1, remark: 2, caution: 3, unit: 6, heading: 7, station: 1, small: 4, ratio: 6, section: 4, count: 7 } as const;
 
 /** The starter book in the grid library's data form (version 19.3.2). */
 export function starterBook(): Record<string, unknown> {
@@ -129,10 +132,9 @@ export function starterBook(): Record<string, unknown> {
           ),
         ],
       },
-      threeMarches(
-        { sheet: SHEET, x: rows("A"), ue: rows("B"), nu: "B6", stations: STATIONS.length },
-        { title: 1, remark: 2, caution: 3, unit: 6, heading: 7, station: 1, small: 4, ratio: 6 },
-      ),
+      threeMarches({ sheet: SHEET, x: rows("A"), ue: rows("B"), nu: "B6", stations: STATIONS.length }, LOOK),
+      gliderDrag(LOOK, 5),
+      hullPlate(LOOK, 5),
     ],
     styles: STYLES,
     formats: FORMATS,

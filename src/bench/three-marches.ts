@@ -12,6 +12,9 @@ export interface SheetLook {
   station: number;
   small: number;
   ratio: number;
+  /** Bold heading of a block, and coefficients with six decimals. */
+  section: number;
+  count: number;
 }
 
 const SHEET = "Three marches";

@@ -1,6 +1,7 @@
 import type { CatalogueEntry } from "../cells/catalogue-entry";
 import { CAUTIONS } from "../cells/cautions";
 import { laminarSection } from "./laminar-section";
+import { turbulentSection } from "./turbulent-section";
 
 /** The help page: every function's card on one page, each under an anchor of its name. Made at build time. */
 export function helpPage(catalogue: readonly CatalogueEntry[]): string {
@@ -28,9 +29,10 @@ article { margin-top: 40px; } .caution { border-left: 4px solid; padding-left: 1
 <body>
 <h1>Wallsheet</h1>
 <div class="caution">${CAUTIONS.map((c) => `<p>${text(c)}</p>`).join("")}</div>
-<nav aria-label="Functions"><h2>Functions</h2><p><a href="#laminar-methods">Which laminar march?</a></p>${list}</nav>
+<nav aria-label="Functions"><h2>Functions</h2><p><a href="#laminar-methods">Which laminar march?</a> · <a href="#turbulent-methods">Which turbulent march?</a></p>${list}</nav>
 <main>
 ${laminarSection()}
+${turbulentSection()}
 ${catalogue.map(card).join("\n")}
 </main>
 </body>

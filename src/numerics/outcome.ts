@@ -36,6 +36,10 @@ export type Reason =
   | "start given twice"
   | "too short"
   | "onset outside"
+  | "gap inside"
+  | "pressure missing"
+  | "ends inside wake"
+  | "pressure never rises"
   | "onset too early"
   | "no convergence";
 

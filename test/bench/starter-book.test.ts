@@ -64,3 +64,37 @@ describe("the starter book", () => {
     expect(at(0, 22 + STATIONS - 1)).toBeCloseTo(0.385, 12);
   });
 });
+
+describe("the glider's drag sheet and the hull plate", () => {
+  const at = (sheetId: string, col: number, row: number) => model.getters.getEvaluatedCell({ sheetId, col, row });
+  it.each(["glider", "hull"])("%s holds no error anywhere", (sheetId) => {
+    for (let row = 0; row < model.getters.getNumberRows(sheetId); row++) {
+      for (let col = 0; col < model.getters.getNumberCols(sheetId); col++) {
+        const cell = at(sheetId, col, row);
+        expect([sheetId, col, row, cell.type, cell.message]).not.toContain("error");
+      }
+    }
+    expect(at(sheetId, 0, 1).value).toMatch(/^Invented scenario, invented numbers/);
+  });
+  it("goes from taps of both sides to onset and drag: friction is most of the profile drag, which lies where such sections lie at Re 0.9e6 (0.006 to 0.012, common practice, no source)", () => {
+    const value = (col: number, row: number) => at("glider", col, row - 1).value as number;
+    expect(value(1, 16)).toBeGreaterThan(0.25);
+    expect(at("glider", 2, 16).value).toBe("none: laminar throughout");
+    expect(value(3, 21)).toBeGreaterThan(0.004);
+    expect(value(3, 22)).toBeGreaterThan(0.006);
+    expect(value(3, 22)).toBeLessThan(0.012);
+    expect(value(3, 21) / value(3, 22)).toBeGreaterThan(0.5);
+    expect(value(3, 21) / value(3, 22)).toBeLessThan(1);
+  });
+  it("a trip moved forward makes the section's drag larger", () => {
+    const drag = () => at("glider", 3, 21).value as number;
+    const free = drag();
+    model.dispatch("UPDATE_CELL", { sheetId: "glider", col: 1, row: 9, content: "0.08" });
+    expect(drag()).toBeGreaterThan(free);
+  });
+  it("the hull's friction lies within 12 % of the ITTC 1957 line at its Reynolds number: 1.6e8", () => {
+    expect(at("hull", 1, 13).value).toBeCloseTo((5 * 35.5) / 1.1386e-6, 0);
+    expect(Math.abs((at("hull", 1, 16).value as number) - 1)).toBeLessThan(0.12);
+    expect(at("hull", 1, 17).value).toBe("");
+  });
+});

@@ -131,6 +131,14 @@ const SENTENCES: Record<Reason, Sentence> = {
     need: (_a, v) => `a wall long enough for a turbulent layer, Re x of ${v("least")}`,
     found: (v) => `it ends at Re x of ${v("value")}`,
   },
+  "gap inside": { code: "#VALUE!", need: (a) => `${a} without gaps between its first and last numbers`, found: () => "is empty" },
+  "pressure missing": { code: "#VALUE!", need: () => "the static pressure coefficient at the rake beside total pressures", found: () => "none is given" },
+  "ends inside wake": {
+    code: "#N/A",
+    need: (_a, v) => `a rake that reaches the undisturbed stream on both sides (total-pressure coefficient 1 within ${v("tolerance")})`,
+    found: (v) => `has ${v("value")}`,
+  },
+  "pressure never rises": { code: "#N/A", need: () => "a pressure that rises somewhere behind its lowest value", found: () => "it falls to the end, so nothing separates" },
   "onset outside": {
     code: "#VALUE!",
     need: (_a, v) => `an onset station inside the column, ${v("least")} to ${v("most")}`,

@@ -920,7 +920,7 @@ export const catalogue: readonly CatalogueEntry[] = [
   {
     "name": "FIELD_MARCH",
     "family": "Laminar",
-    "purpose": "Marches a laminar layer along a wall by the full boundary-layer equations, with suction or blowing through the wall: the same table as THWAITES_MARCH, and the judge of the integral methods.",
+    "purpose": "Marches a layer along a wall by the full boundary-layer equations, laminar with suction or blowing through the wall, or turbulent from an onset on by an eddy viscosity: the judge of the integral methods.",
     "parameters": [
       {
         "name": "x",
@@ -942,7 +942,7 @@ export const catalogue: readonly CatalogueEntry[] = [
       },
       {
         "name": "options",
-        "description": "Two columns (label, value) or text: start momentum loss, start shape, edge fit (spline, monotone, smooth), noise, grid refinement (1 to 8), Richardson (no, yes), after separation (stop), columns.",
+        "description": "Two columns (label, value) or text: start momentum loss, start shape, onset (none, free, a station, from start), onset criterion (Michel), edge fit (spline, monotone, smooth), noise, grid refinement (1 to 8), Richardson (no, yes), after separation (stop), columns.",
         "unit": "as their labels say",
         "optional": true
       },
@@ -966,9 +966,12 @@ export const catalogue: readonly CatalogueEntry[] = [
       "Error of the numbers themselves at default settings on four laminar layers (1 − x, 1 − x², sin x, Hiemenz's cylinder; 50 to 200 stations): θ, δ*, δ3 and H within 0.04 % up to the last station before separation, cf 0.04 % up to 97 % of the way, separation station 0.01 %. Richardson = yes brings θ and δ* to 0.001 % and cf to 0.0005 %.",
       "Flat plate within 0.0005 %; sphere 104.8°; uniform blowing of a flat plate lifts off at (vw/ue)² Rex = 0.745.",
       "Few stations cost what the edge curve between them is wrong, not what the march is: steps are chosen by their own error. 15 stations change the separation station of seven decelerating flows by less than 0.001 % and θ by 0.002 % (edge fit = spline). Separation comes from the square-root law of the wall shear; at a given edge speed the equations end there, and after separation = continue adds nothing.",
-      "A start with a given θ takes the profile of a similar layer on a solid wall; one that hardly holds to the wall (H near 4) and does not fit the gradient may have no solution. No transition: the layer is taken as laminar throughout."
+      "A start with a given θ takes the profile of a similar layer on a solid wall; one that hardly holds to the wall (H near 4) and does not fit the gradient may have no solution. Laminar throughout unless an onset is given.",
+      "Turbulent part (onset given): constant density, solid wall, the eddy viscosity in full at once from the onset on; about 0.2 s. Its numbers: θ 0.3 %, cf 0.1 %, H 0.1 % against a grid and steps twice as fine. The model: wall friction of the plate 0 to 4 % low against Wieghardt & Tillmann and DNS, H 2 % low; Samuel & Joubert and the bubbles of Coleman, Rumsey & Spalart: see the comparison table of the help.",
+      "A laminar layer that separates first is made turbulent half-way between its last station and separation, without a bubble. From start: from Re θ = 100 behind a leading edge, 320 behind a stagnation point."
     ],
     "sources": [
+      "T. Cebeci & A. M. O. Smith, Analysis of Turbulent Boundary Layers (1974), and T. Cebeci & P. Bradshaw, Momentum Transfer in Boundary Layers (1977): eddy viscosity (constants from memory).",
       "H. B. Keller & T. Cebeci, Lecture Notes in Physics 8 (1971) 92–100 (block elimination; ours is of fourth order across the layer and, with backward differences, of third along the wall).",
       "S. Goldstein, Q. J. Mech. Appl. Math. 1 (1948) 43–69 (separation); W. Mangler, ZAMM 28 (1948) 97–103 (round bodies); L. F. Richardson, Phil. Trans. A 226 (1927) 299–361."
     ],
@@ -1398,6 +1401,81 @@ export const catalogue: readonly CatalogueEntry[] = [
     ]
   },
   {
+    "name": "SEPARATION_MARGIN",
+    "family": "Turbulent",
+    "purpose": "Tells how far a layer is from separation along a rising pressure, by Stratford's criteria, without marching it: 1 far from it, 0 at separation.",
+    "parameters": [
+      {
+        "name": "x",
+        "description": "Stations along the wall from where the layer begins, rising.",
+        "unit": "length",
+        "optional": false
+      },
+      {
+        "name": "cp",
+        "description": "Pressure coefficient at each station, at most 1.",
+        "unit": "1",
+        "optional": false
+      },
+      {
+        "name": "layer",
+        "description": "turbulent (default) or laminar.",
+        "unit": "word",
+        "optional": true
+      },
+      {
+        "name": "reference_speed",
+        "description": "Speed of the reference flow; needed for a turbulent layer.",
+        "unit": "speed",
+        "optional": true
+      },
+      {
+        "name": "nu",
+        "description": "Kinematic viscosity; needed for a turbulent layer.",
+        "unit": "length²/time",
+        "optional": true
+      },
+      {
+        "name": "onset",
+        "description": "Station ahead of the lowest pressure where the layer turns turbulent; omitted: at the first station.",
+        "unit": "length",
+        "optional": true
+      },
+      {
+        "name": "noise",
+        "description": "Standard deviation of the noise in cp, which is then smoothed; omitted: the curve goes through all points.",
+        "unit": "1",
+        "optional": true
+      }
+    ],
+    "gives": "A heading row, then a row a station with the margin and what it is made of; ahead of the lowest pressure the margin is empty.",
+    "resultUnit": "x and x̄ length, others 1",
+    "limits": [
+      "Constant density, plane wall, one pressure minimum that counts (the lowest); the layer at it is replaced by the plate layer of the same momentum loss. Close behind the minimum the turbulent formula is crude.",
+      "Turbulent: C̄p up to 4/7, Re from 1e6 on; 0.39 where pressure curves upward, 0.35 where it does not. On the conservative side by design: the tests find separation called ahead of its place.",
+      "Laminar: separation of ue = 1 − x at 0.1215 for 0.1198 by the full equations."
+    ],
+    "sources": [
+      "B. S. Stratford, ARC R&M 3002 (1954) (laminar, 0.0104); J. Fluid Mech. 5 (1959) 1–16 (turbulent, 0.39 and 0.35).",
+      "A. M. O. Smith, J. Aircraft 12 (1975) 501–526 (equivalent start; powers and 38.2 from memory)."
+    ],
+    "examples": [
+      {
+        "formula": "=ROUND(INDEX(WALL.SEPARATION_MARGIN({0;0.05;0.1},{0;0.0975;0.19},\"laminar\"),3,6),2)",
+        "value": 0.92
+      }
+    ],
+    "words": [
+      "Stratford",
+      "separation",
+      "criterion",
+      "adverse",
+      "pressure",
+      "gradient",
+      "stall"
+    ]
+  },
+  {
     "name": "LAYER_MARCH",
     "family": "Surface",
     "purpose": "Marches the layer along a whole wall in one call: laminar from the start, an onset found or given, turbulent to the end, in one table with a state for each row.",
@@ -1472,6 +1550,268 @@ export const catalogue: readonly CatalogueEntry[] = [
       "separation",
       "bubble",
       "trip"
+    ]
+  },
+  {
+    "name": "LAYER_SUMMARY",
+    "family": "Surface",
+    "purpose": "Sums up a layer's table: onset, separation, values at the end, largest wall friction, friction drag of the side, and what its notes say.",
+    "parameters": [
+      {
+        "name": "table",
+        "description": "A table spilled by a march, heading row included, such as D5#; it needs station, edge speed, θ, δ*, H, cf, state and note.",
+        "unit": "as spilled",
+        "optional": false
+      },
+      {
+        "name": "reference_speed",
+        "description": "Speed of the reference flow; omitted: the friction is given as a force over ½ρ, without coefficient.",
+        "unit": "speed",
+        "optional": true
+      },
+      {
+        "name": "chord",
+        "description": "Length the drag coefficient is referred to; omitted: from the first station to the last.",
+        "unit": "length",
+        "optional": true
+      }
+    ],
+    "gives": "Quantity and value, one a row; empty where there is nothing to tell.",
+    "resultUnit": "in the units of the table",
+    "limits": [
+      "One side of a body; a table spilled by a march of this add-in with its columns whole (columns option: at least station, edge speed, θ, δ*, H, cf, state, note).",
+      "Friction drag is that of the wall without pressure drag, per unit span, constant density; wall friction beyond separation counts as 0, and the onset's jump is taken where the note says it is."
+    ],
+    "sources": [
+      "Own definition; friction drag as in FRICTION_DRAG."
+    ],
+    "examples": [
+      {
+        "formula": "=ROUND(INDEX(WALL.LAYER_SUMMARY(WALL.LAYER_MARCH({0;0.5;1;1.5;2},{50;50;50;50;50},0.000015,\"onset = from start\"),50),14,2),5)",
+        "value": 0.00313
+      }
+    ],
+    "words": [
+      "summary",
+      "result",
+      "onset",
+      "separation",
+      "drag",
+      "end",
+      "values"
+    ]
+  },
+  {
+    "name": "FRICTION_DRAG",
+    "family": "Drag",
+    "purpose": "Gives the friction drag coefficient of one side of a wall from its wall friction and edge speed: ∫ cf (ue/U)² dx over the chord.",
+    "parameters": [
+      {
+        "name": "x",
+        "description": "Stations along the wall, rising, from where the layer begins.",
+        "unit": "length",
+        "optional": false
+      },
+      {
+        "name": "cf",
+        "description": "Wall friction at each station, of the local edge speed; empty at the first where the layer begins there, and empty beyond separation, where it counts as 0.",
+        "unit": "1",
+        "optional": false
+      },
+      {
+        "name": "ue",
+        "description": "Edge speed at each station.",
+        "unit": "speed",
+        "optional": false
+      },
+      {
+        "name": "reference_speed",
+        "description": "Speed U of the reference flow.",
+        "unit": "speed",
+        "optional": false
+      },
+      {
+        "name": "chord",
+        "description": "Length the coefficient is referred to; omitted: from the first station to the last.",
+        "unit": "length",
+        "optional": true
+      },
+      {
+        "name": "surface_x",
+        "description": "Streamwise coordinate of each station: only the friction's component in that direction counts; omitted: the whole friction.",
+        "unit": "length",
+        "optional": true
+      }
+    ],
+    "gives": "Friction drag coefficient of this side, per unit span.",
+    "resultUnit": "1",
+    "limits": [
+      "Constant density, plane walls (per unit span). At a leading edge the friction is carried to the edge by the power of the distance that the next two stations show, −1/2 to 0; from a stagnation point it grows in proportion.",
+      "Flat plate from 20 even stations within 0.01 %. At an onset between two stations the jump is spread over that step: put a station close to it, or use LAYER_SUMMARY, which knows the place.",
+      "Friction only: the pressure drag that the layer causes is in WAKE_DRAG."
+    ],
+    "sources": [
+      "Own definition: wall friction times dynamic pressure of the edge, integrated along the wall (common practice, no source)."
+    ],
+    "examples": [
+      {
+        "formula": "=ROUND(WALL.FRICTION_DRAG({0;0.25;0.5;0.75;1},{\"\";0.001328;0.000939;0.000767;0.000664},{1;1;1;1;1},1),5)",
+        "value": 0.00133
+      }
+    ],
+    "words": [
+      "skin",
+      "friction",
+      "drag",
+      "coefficient",
+      "viscous",
+      "resistance"
+    ]
+  },
+  {
+    "name": "RAKE_DRAG",
+    "family": "Drag",
+    "purpose": "Gives the profile drag coefficient from a traverse of the wake, by Jones's and Betz's formulas, with its standard uncertainty.",
+    "parameters": [
+      {
+        "name": "y",
+        "description": "Places across the wake, rising.",
+        "unit": "length",
+        "optional": false
+      },
+      {
+        "name": "value",
+        "description": "Reading at each place: speed over the stream's speed, or total-pressure coefficient (p0 − p∞)/q∞, 1 outside the wake.",
+        "unit": "1",
+        "optional": false
+      },
+      {
+        "name": "kind",
+        "description": "speed (default) or total pressure.",
+        "unit": "word",
+        "optional": true
+      },
+      {
+        "name": "static_pressure",
+        "description": "Static pressure coefficient at the rake: one number, or one for each place; omitted with speeds: found from the two ends, where the total pressure is the stream's.",
+        "unit": "1",
+        "optional": true
+      },
+      {
+        "name": "chord",
+        "description": "Length the coefficient is referred to; omitted: 1.",
+        "unit": "length",
+        "optional": true
+      },
+      {
+        "name": "value_error",
+        "description": "Standard uncertainty of each reading.",
+        "unit": "1",
+        "optional": true
+      },
+      {
+        "name": "y_error",
+        "description": "Standard uncertainty of each place.",
+        "unit": "length",
+        "optional": true
+      },
+      {
+        "name": "pressure_error",
+        "description": "Standard uncertainty of the static pressure coefficient, the same all along.",
+        "unit": "1",
+        "optional": true
+      }
+    ],
+    "gives": "Quantity, value and ± standard uncertainty, one a row.",
+    "resultUnit": "1, the momentum loss in the unit of y",
+    "limits": [
+      "Constant density; wake of a body in an unbounded stream, mean flow along it. Both ends must lie in the undisturbed stream: total-pressure coefficient 1 within 0.03.",
+      "Too near the trailing edge (less than about 0.05 chord) the static pressure varies across the wake and the formulas stray: 12 % high at 0.01 chord behind Nakayama's aerofoil against 0.4 chord and farther. The two formulas should agree; where they do not, move the rake back.",
+      "The uncertainty is first order, readings independent of each other, the static pressure common to all; the number of points shows in the curve error."
+    ],
+    "sources": [
+      "A. Betz, ZFM 16 (1925) 42–44; B. M. Jones, ARC R&M 1688 (1936) (formulas as in Schlichting, Boundary-Layer Theory, ch. 25; from memory)."
+    ],
+    "examples": [
+      {
+        "formula": "=ROUND(INDEX(WALL.RAKE_DRAG({-3;-2;-1;0;1;2;3},{1;1;0.9;0.8;0.9;1;1},,,10),2,2),3)",
+        "value": 0.068
+      }
+    ],
+    "words": [
+      "wake",
+      "survey",
+      "rake",
+      "pitot",
+      "profile",
+      "drag",
+      "Betz",
+      "Jones",
+      "momentum"
+    ]
+  },
+  {
+    "name": "WAKE_DRAG",
+    "family": "Drag",
+    "purpose": "Gives the profile drag coefficient that a trailing-edge layer stands for, by Squire and Young's wake formula; one row for each side, to be added up.",
+    "parameters": [
+      {
+        "name": "theta",
+        "description": "Momentum loss at the trailing edge, one row a side.",
+        "unit": "length",
+        "optional": false
+      },
+      {
+        "name": "shape",
+        "description": "Shape factor H there.",
+        "unit": "1",
+        "optional": false
+      },
+      {
+        "name": "edge_speed_ratio",
+        "description": "Edge speed there over the reference speed.",
+        "unit": "1",
+        "optional": false
+      },
+      {
+        "name": "mach",
+        "description": "Mach number of the reference flow; omitted or 0: constant density.",
+        "unit": "1",
+        "optional": true
+      },
+      {
+        "name": "chord",
+        "description": "Length the coefficient is referred to; omitted: 1.",
+        "unit": "length",
+        "optional": true
+      }
+    ],
+    "gives": "Drag coefficient of each side, per unit span: 2 θ (ue/U)^((H + 5)/2) over the chord.",
+    "resultUnit": "1",
+    "limits": [
+      "Attached layers to the trailing edge, or nearly: H up to 2.8 (plus M²), edge speed ratio up to 3; refused beyond. Trailing-edge speeds of measured pressures or of an inviscid solution relieved at the edge: an inviscid stagnation point there gives nothing.",
+      "With a Mach number the exponent takes H and the density of the edge: (H + 1 + 0.4 M²)/2 + 2 and the factor ρe/ρ∞; no shocks between layer and wake.",
+      "Held against RAE 2822 at Mach 0.676, 85 counts measured in the wake: the measured trailing-edge layers (H 2.3 on the upper side) give 95, layers by LAYER_MARCH from the measured pressures 86."
+    ],
+    "sources": [
+      "H. B. Squire & A. D. Young, ARC R&M 1838 (1938); the compressible form is the same integration with −M² in the momentum equation (own, for γ = 1.4)."
+    ],
+    "examples": [
+      {
+        "formula": "=ROUND(SUM(WALL.WAKE_DRAG({0.003;0.002},{1.8;1.5},{0.95;0.95})),5)",
+        "value": 0.00843
+      }
+    ],
+    "words": [
+      "profile",
+      "drag",
+      "wake",
+      "Squire",
+      "Young",
+      "trailing",
+      "edge",
+      "momentum",
+      "thickness"
     ]
   },
   {

@@ -21,7 +21,12 @@ import { similarProfile } from "../laminar/similar-profile";
 import { thwaitesMarch } from "../laminar/thwaites-march";
 import { entrainmentMarch } from "../turbulent/entrainment-march";
 import { lagMarch } from "../turbulent/lag-march";
+import { separationMargin } from "../turbulent/separation-margin";
 import { layerMarch } from "../surface/layer-march";
+import { layerSummary } from "../surface/layer-summary";
+import { frictionDrag } from "../drag/friction-drag";
+import { rakeDrag } from "../drag/rake-drag";
+import { wakeDrag } from "../drag/wake-drag";
 import { wallBlowVelocity } from "../displacement/wall-blow-velocity";
 import { columnOf } from "../sheet/column-of";
 import { inputCheck } from "../sheet/input-check";
@@ -52,7 +57,12 @@ export const wallFunctions: Readonly<Record<string, (...args: any[]) => unknown>
   THWAITES_MARCH: thwaitesMarch,
   ENTRAINMENT_MARCH: entrainmentMarch,
   LAG_MARCH: lagMarch,
+  SEPARATION_MARGIN: separationMargin,
   LAYER_MARCH: layerMarch,
+  LAYER_SUMMARY: layerSummary,
+  FRICTION_DRAG: frictionDrag,
+  RAKE_DRAG: rakeDrag,
+  WAKE_DRAG: wakeDrag,
   WALL_BLOW_VELOCITY: wallBlowVelocity,
   COLUMN_OF: columnOf,
   INPUT_CHECK: inputCheck,

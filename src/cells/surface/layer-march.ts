@@ -1,18 +1,16 @@
-import { michel } from "../../physics/onset/michel";
-import type { OnsetCriterion } from "../../physics/onset/onset-criterion";
 import type { LaminarMethodName } from "../../physics/surface/laminar-methods";
-import { layerMarch as marchOverSurface, LEAST_TURBULENT_REYNOLDS, type LayerMarch, type OnsetChoice } from "../../physics/surface/layer-march";
+import { layerMarch as marchOverSurface } from "../../physics/surface/layer-march";
 import { cellError } from "../errors/cell-error";
 import { refusalError } from "../errors/sentences";
 import { readWall } from "../laminar/read-wall";
 import type { Call } from "../reading/call";
 import { openCall } from "../reading/call";
 import { readOptions, type Options } from "../reading/read-options";
-import { nearSeparation, stopWords } from "../turbulent/turbulent-table";
-import { formatNumber } from "../writing/format-number";
-import { layerTable, type TableRemark } from "./layer-table";
-import { onsetWords } from "./onset-words";
+import { nearSeparation } from "../turbulent/turbulent-table";
+import { layerRemarks } from "./layer-remarks";
+import { layerTable } from "./layer-table";
 import { readGas } from "./read-gas";
+import { readOnset } from "./read-onset";
 
 const ACCEPTED = [
   "start momentum loss",
@@ -32,8 +30,6 @@ const ACCEPTED = [
   "after separation",
   "columns",
 ] as const;
-
-const CRITERIA: readonly OnsetCriterion[] = [michel];
 
 /**
  * Marches the layer along a whole wall in one call: laminar from the start, an onset found or given, turbulent to the end, in one table with a state for each row.
@@ -93,7 +89,7 @@ export function layerMarch(x: any[][], ue: any[][], nu: any, options: any[][], r
     "after separation": "stop",
   });
   const from = march.start === "given momentum loss" ? "from a given momentum loss" : `at a ${march.start}`;
-  const remarks = [...marchRemarks(march, turbulentMethod), ...(turbulentMethod === "entrainment" ? nearSeparation(wall.edge, march.columns.shape, march.columns.given) : [])];
+  const remarks = [...layerRemarks(march, turbulentMethod), ...(turbulentMethod === "entrainment" ? nearSeparation(wall.edge, march.columns.shape, march.columns.given) : [])];
   const beyond = march.stop.kind.endsWith("limit") ? "out of range" : "separated";
   return layerTable(call, wall.edge, march.columns, { settings: `whole layer, ${words}; ${used}; starts ${from}`, remarks, beyond }, settings.columns());
 }
@@ -103,63 +99,4 @@ function readTurbulentMethod(call: Call, options: Options): "lag" | "entrainment
   if (method === "field") throw cellError("#VALUE!", `${call.name} needs turbulent method = lag or entrainment; for the full equations use FIELD_MARCH with the same onset`);
   if (method === "entrainment" && options.number("reference Mach")) throw cellError("#VALUE!", `${call.name} needs turbulent method = lag where reference Mach is given; entrainment is of constant density`);
   return method as "lag" | "entrainment";
-}
-
-function readOnset(call: Call, options: Options): OnsetChoice {
-  const station = options.number("onset");
-  const word = station === undefined ? (options.word("onset") ?? "free") : "fixed";
-  const added = options.number("trip momentum loss");
-  if (added !== undefined && word !== "fixed") throw cellError("#VALUE!", `${call.name} needs onset = a station where trip momentum loss is given; it has ${word}`);
-  const criterion = options.word("onset criterion");
-  if (criterion !== undefined && word !== "free") throw cellError("#VALUE!", `${call.name} needs onset = free where an onset criterion is given; it has ${station ?? word}`);
-  if (station !== undefined) return { kind: "fixed", x: station, addedMomentumLoss: added ?? 0 };
-  if (word === "free") return { kind: "free", criterion: CRITERIA.find((c) => c.name === criterion) ?? michel, turbulence: options.number("turbulence level") ?? 0 };
-  return word === "from start" ? { kind: "from start" } : { kind: "none" };
-}
-
-const HOW: Record<NonNullable<LayerMarch["onset"]>["kind"], string> = {
-  free: "free",
-  fixed: "fixed",
-  "from start": "from start",
-  separation: "reattachment",
-  "least Reynolds": `Re θ ${LEAST_TURBULENT_REYNOLDS} behind the stagnation point`,
-};
-
-function marchRemarks(march: LayerMarch, method: "lag" | "entrainment"): TableRemark[] {
-  const out: TableRemark[] = [];
-  const { onset, bubble, stop } = march;
-  if (bubble !== null) {
-    const missed = march.missedTrip === null ? "" : `, ahead of the fixed onset at ${formatNumber(march.missedTrip)}`;
-    out.push({ x: bubble.separation, words: `laminar separation at x = ${formatNumber(bubble.separation)}${missed}` });
-    out.push({
-      x: bubble.separation,
-      words: `WARNING bubble: turbulent from x = ${formatNumber(bubble.onset)}, reattaches at x = ${formatNumber(bubble.reattachment)}, θ ${formatNumber(bubble.momentumLoss)} to ${formatNumber(bubble.reattachmentLoss)} (Horton)`,
-    });
-  }
-  if (onset !== null) {
-    const shape = `, H from ${formatNumber(onset.startShape)}`;
-    const low = onset.kind === "fixed" && onset.momentumReynolds < LEAST_TURBULENT_REYNOLDS ? `; below Re θ ${LEAST_TURBULENT_REYNOLDS} a trip may not hold` : "";
-    const range = onset.remark === "" ? "" : `; ${onset.remark}`;
-    out.push({ x: onset.x, words: `${onsetWords(HOW[onset.kind], onset.x, onset.momentumReynolds)}${shape}${low}${range}` });
-  }
-  const place = stop.kind === "end" ? "" : `at x = ${formatNumber(stop.x)}, momentum loss ${formatNumber(stop.momentumLoss)}`;
-  switch (stop.kind) {
-    case "end":
-      break;
-    case "laminar separation":
-      out.push({ x: stop.x, words: `laminar separation ${place}` });
-      break;
-    case "no reattachment":
-      out.push({ x: stop.x, words: `laminar separation ${place}; WARNING no short bubble closes on this wall (Horton)` });
-      break;
-    case "laminar limit":
-      out.push({ x: stop.x, words: `the laminar method leaves its range ${place}` });
-      break;
-    case "turbulent separation":
-      out.push({ x: stop.x, words: stopWords("separation", method, stop.x, stop.momentumLoss) });
-      break;
-    case "turbulent limit":
-      out.push({ x: stop.x, words: stopWords("limit", method, stop.x, stop.momentumLoss) });
-  }
-  return out;
 }

@@ -2,7 +2,8 @@ import { formatNumber } from "../writing/format-number";
 
 /** The words by which a layer's note tells its onset; LAYER_SUMMARY finds the station in them again. */
 export function onsetWords(how: string, x: number, momentumReynolds: number): string {
-  return `onset (${how}) at x = ${formatNumber(x)}, Re θ = ${formatNumber(momentumReynolds)}`;
+  const thickness = momentumReynolds > 0 ? `, Re θ = ${formatNumber(momentumReynolds)}` : "";
+  return `onset (${how}) at x = ${formatNumber(x)}${thickness}`;
 }
 
 const ONSET = /onset \(([^)]*)\) at x = (-?[\d.eE+-]+\d)/;

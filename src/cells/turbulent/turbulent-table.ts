@@ -25,10 +25,10 @@ export function turbulentTable(call: Call, edge: EdgeCurve, march: TurbulentMarc
 }
 
 /** Words for the end of a turbulent march. */
-export function stopWords(kind: "separation" | "limit", method: "entrainment" | "lag", x: number, momentumLoss: number): string {
+export function stopWords(kind: "separation" | "limit", method: "entrainment" | "lag" | "field", x: number, momentumLoss: number): string {
   const place = `at x = ${formatNumber(x)}, momentum loss ${formatNumber(momentumLoss)}`;
   if (kind === "limit") return `the layer leaves the range of the method's relations ${place}`;
-  return `turbulent separation ${place} (${method === "lag" ? "wall friction 0" : "H = 2.4"})`;
+  return `turbulent separation ${place} (${method === "entrainment" ? "H = 2.4" : "wall friction 0"})`;
 }
 
 /** Where H of the entrainment method first passes 1.8: Head's range of separation begins there. */

@@ -37,6 +37,11 @@ export const HEADINGS = [
   { key: "speed_ratio", heading: "speed ratio u/ue", symbol: "u/ue" },
   { key: "speed_slope", heading: "speed gradient ∂u/∂y", symbol: "∂u/∂y" },
   { key: "similar_shear", heading: "similar shear", symbol: "∂(u/ue)/∂η" },
+  { key: "canonical_pressure", heading: "canonical pressure C̄p", symbol: "C̄p" },
+  { key: "equivalent_distance", heading: "equivalent distance x̄", symbol: "x̄" },
+  { key: "separation_number", heading: "separation number", symbol: "F" },
+  { key: "separation_limit", heading: "separation limit", symbol: "Fs" },
+  { key: "margin", heading: "margin to separation", symbol: "1 − F/Fs" },
   { key: "state", heading: "state", symbol: "state" },
   { key: "note", heading: "note", symbol: "note" },
 ] as const satisfies readonly Heading[];

@@ -8,7 +8,7 @@ import { panelPowerIntegral, powerRule, runningPowerIntegral } from "../edge/pow
 
 /** Thwaites' constants: ue dθ²∕dx = ν (0.45 − 6λ). Thwaites, Aero. Quart. 1 (1949) 245–280. */
 export const GROWTH = 0.45;
-const DAMPING = 6;
+export const DAMPING = 6;
 /** The power of ue under the integral, one less than DAMPING. */
 const POWER = 5;
 /** θ² ue′∕ν at a plane stagnation point, 0.45∕6, and at a round one, 0.45∕8 (Rott & Crabtree, J. Aero. Sci. 19 (1952) 553–565). */

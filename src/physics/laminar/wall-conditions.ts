@@ -74,14 +74,36 @@ export function wallConditions(edge: EdgeCurve, options: { radius?: PiecewiseCub
 
 /** The conditions at the fraction t of panel i, written into `out`. */
 export function wallPlace(wall: WallConditions, i: number, t: number, out: WallPlace): WallPlace {
-  const { curve } = wall.edge;
-  out.x = t === 1 ? curve.x[i + 1] : curve.x[i] + t * (curve.x[i + 1] - curve.x[i]);
-  out.speed = panelValue(curve, i, t);
-  out.speedSlope = panelSlope(curve, i, t);
-  out.radius = wall.radius === null ? 1 : panelValue(wall.radius, i, t);
-  out.radiusSlope = wall.radius === null ? 0 : panelSlope(wall.radius, i, t);
-  out.wallVelocity = wall.wallVelocity === null ? 0 : panelValue(wall.wallVelocity, i, t);
-  out.flow = wall.wallVelocity === null ? 0 : t === 1 ? wall.flow[i + 1] : wall.flow[i] + partialFlow(wall, i, t);
+  const { x, value, slope } = wall.edge.curve;
+  const h = x[i + 1] - x[i];
+  if (t === 1) {
+    out.x = x[i + 1];
+    out.speed = value[i + 1];
+    out.speedSlope = slope[i + 1];
+  } else {
+    // panelValue and panelSlope in one: this is read some thousand times a march.
+    const s0 = slope[i];
+    const chord = (value[i + 1] - value[i]) / h;
+    const c2 = 3 * chord - 2 * s0 - slope[i + 1];
+    const c3 = s0 + slope[i + 1] - 2 * chord;
+    out.x = x[i] + t * h;
+    out.speed = value[i] + h * t * (s0 + t * (c2 + t * c3));
+    out.speedSlope = s0 + t * (2 * c2 + t * 3 * c3);
+  }
+  if (wall.radius !== null) {
+    out.radius = panelValue(wall.radius, i, t);
+    out.radiusSlope = panelSlope(wall.radius, i, t);
+  } else {
+    out.radius = 1;
+    out.radiusSlope = 0;
+  }
+  if (wall.wallVelocity !== null) {
+    out.wallVelocity = panelValue(wall.wallVelocity, i, t);
+    out.flow = t === 1 ? wall.flow[i + 1] : wall.flow[i] + partialFlow(wall, i, t);
+  } else {
+    out.wallVelocity = 0;
+    out.flow = 0;
+  }
   return out;
 }
 

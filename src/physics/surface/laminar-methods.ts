@@ -1,6 +1,7 @@
 import type { Outcome } from "../../numerics/outcome";
 import { energyMarch } from "../laminar/energy-march";
 import { fieldMarch } from "../laminar/field-march";
+import { DAMPING, GROWTH } from "../laminar/thwaites-growth";
 import { thwaitesMarch } from "../laminar/thwaites-march";
 import type { WallConditions } from "../laminar/wall-conditions";
 import type { LaminarPart } from "./laminar-part";
@@ -19,7 +20,7 @@ export function laminarByMethod(
     const made = thwaitesMarch(wall.edge, nu, { radius: wall.radius ?? undefined, startMomentumLoss: start.startMomentumLoss });
     if (!made.ok) return made;
     const { stop } = made.march;
-    return { ok: true, part: laminarPart(wall, nu, made.march, stop.kind === "end" ? NO_END : stop) };
+    return { ok: true, part: laminarPart(wall, nu, made.march, stop.kind === "end" ? NO_END : stop, (gradient) => (GROWTH - DAMPING * gradient) / 2) };
   }
   if (method === "energy") {
     const made = energyMarch(wall, nu, start);

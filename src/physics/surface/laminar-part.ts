@@ -29,7 +29,11 @@ export interface LaminarPart {
 /** θ∕√(ν x∕ue) of a flat plate, Blasius 1908: turns a given θ into the run of plate behind it. */
 const PLATE = 0.664;
 
-export function laminarPart(wall: WallConditions, nu: number, march: LaminarColumns, end: LaminarEnd): LaminarPart {
+/**
+ * @param balance S − (2 + H) λ of a station, half the growth of θ² ue∕ν; omitted: from the march's own columns. Thwaites' S and H satisfy it only nearly,
+ *   his growth of θ² is 0.45 − 6 λ by itself.
+ */
+export function laminarPart(wall: WallConditions, nu: number, march: LaminarColumns, end: LaminarEnd, balance?: (gradient: number) => number): LaminarPart {
   const { curve } = wall.edge;
   const n = march.reached;
   const growth = new Float64Array(n);
@@ -38,8 +42,9 @@ export function laminarPart(wall: WallConditions, nu: number, march: LaminarColu
     const theta = march.momentumLoss[i];
     const ue = curve.value[i];
     const shear = (march.friction[i] * march.momentumReynolds[i]) / 2;
+    const half = balance === undefined ? shear - (2 + march.shape[i]) * march.gradient[i] : balance(march.gradient[i]);
     const spread = wall.radius === null || wall.radius.value[i] === 0 ? 0 : (2 * theta * theta * wall.radius.slope[i]) / wall.radius.value[i];
-    growth[i] = ((2 * nu) / ue) * (shear - (2 + march.shape[i]) * march.gradient[i]) - spread;
+    growth[i] = ((2 * nu) / ue) * half - spread;
   }
   // At a stagnation point or leading edge the equation reads 0∕0: the parabola through both stations with the second one's slope.
   if (n > 1 && march.frictionBlank[0] === 1) growth[0] = (2 * (march.momentumLoss[1] ** 2 - march.momentumLoss[0] ** 2)) / (curve.x[1] - curve.x[0]) - growth[1];
@@ -85,7 +90,7 @@ export function onsetPlace(part: LaminarPart, panel: number, x: number, turbulen
 }
 
 /** Places looked at in a panel before the crossing is refined. */
-const LOOKS = 4;
+const LOOKS = 2;
 
 /** Where a criterion is first met, located inside the panel. */
 export function findOnset(part: LaminarPart, criterion: Pick<OnsetCriterion, "excess">, turbulence: number): { panel: number; x: number } | null {
