@@ -29,6 +29,7 @@ const copies = [
   copy("font-awesome/README.md", "font-awesome/README.md"), // states its licences: OFL 1.1 (font), MIT (style sheet)
   { from: path.join(top, "src/bench/bench.css"), to: "bench.css" },
   { from: path.join(top, "src/pane/pane.css"), to: "pane.css" },
+  { from: path.join(top, "src/chart/chart.css"), to: "chart.css" },
 ];
 
 /** The compiled templates as text; made in a process of its own because their compiler changes globals. */

@@ -30,6 +30,13 @@ module.exports = {
       from: { path: "^src/(numerics|physics|cells)/" },
       to: { pathNot: "node_modules/fastest-levenshtein/", dependencyTypes: ["npm", "npm-dev", "npm-optional", "npm-peer", "npm-no-pkg", "npm-unknown", "core"] },
     },
+    {
+      name: "chart takes plain data and the d3 scales and shapes, no other package",
+      severity: "error",
+      from: { path: "^src/chart/" },
+      to: { pathNot: "node_modules/(@types/)?d3-(scale|shape)/", dependencyTypes: ["npm", "npm-dev", "npm-optional", "npm-peer", "npm-no-pkg", "npm-unknown", "core"] },
+    },
+    { name: "only chart draws", severity: "error", from: { path: "^src/", pathNot: "^src/chart/" }, to: { path: "node_modules/(@types/)?d3-" } },
     { name: "no circles", severity: "error", from: {}, to: { circular: true } },
     { name: "no room outside the plan", severity: "error", from: { path: "^src/", pathNot: rooms.map((r) => `^src/${r}/`) }, to: {} },
     { name: "not found", severity: "error", from: {}, to: { couldNotResolve: true } },

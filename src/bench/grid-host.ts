@@ -1,6 +1,7 @@
 import { excelErrorCode } from "../engine/engine-values";
 import type { EngineEvaluatedCell, EnginePosition, EngineZone } from "../engine/types";
 import { blockAddress, type CellBlock } from "../pane/cell-block";
+import { element } from "../pane/element";
 import { calledFunctions } from "../pane/form-formula";
 import type { ChartRequest, HostCell, HostValue, SheetHost, WallCell } from "../pane/sheet-host";
 import { typedContent, WRITE_CELLS } from "./block-writer";
@@ -31,6 +32,13 @@ export function gridHost(model: GridModel): SheetHost {
   function formulaAt(at: EnginePosition): string | undefined {
     const cell = getters.getCell(at);
     return cell?.isFormula ? (cell.compiledFormula?.toFormulaString(getters) ?? cell.content) : undefined;
+  }
+  function wallCellAt(at: EnginePosition): WallCell | undefined {
+    const formula = formulaAt(at);
+    if (formula === undefined || calledFunctions(formula).length === 0) return undefined;
+    const own = { left: at.col, right: at.col, top: at.row, bottom: at.row };
+    const error = errorOf(getters.getEvaluatedCell(at));
+    return { at: blockOf(at.sheetId, own), formula, spill: blockOf(at.sheetId, getters.getSpreadZone(at) ?? own), ...(error && { error }) };
   }
   function command(name: string, payload: Record<string, unknown>, sentence: string): void {
     const { isSuccessful, reasons } = model.dispatch(name, payload);
@@ -81,14 +89,23 @@ export function gridHost(model: GridModel): SheetHost {
       for (const id of getters.getSheetIds()) {
         const formulas = getters.getCells(id).filter((cell) => cell.isFormula).map((cell) => getters.getCellPosition(cell.id));
         for (const at of formulas.sort((a, b) => a.row - b.row || a.col - b.col)) {
-          const formula = formulaAt(at)!;
-          if (calledFunctions(formula).length === 0) continue;
-          const own = { left: at.col, right: at.col, top: at.row, bottom: at.row };
-          const error = errorOf(getters.getEvaluatedCell(at));
-          found.push({ at: blockOf(id, own), formula, spill: blockOf(id, getters.getSpreadZone(at) ?? own), ...(error && { error }) });
+          const cell = wallCellAt(at);
+          if (cell) found.push(cell);
         }
       }
       return found;
+    },
+
+    async tableAt(at) {
+      const place = first(at);
+      return wallCellAt(getters.getArrayFormulaSpreadingOn(place) ?? place);
+    },
+
+    async saveFile(name, content) {
+      const link = element("a", { href: URL.createObjectURL(content), download: name });
+      link.click();
+      // The browser has taken the file by the time the next task runs.
+      setTimeout(() => URL.revokeObjectURL(link.href), 0);
     },
 
     async goTo(block) {

@@ -3,6 +3,7 @@ import { prepareEngine } from "../engine/prepare-engine";
 import { wallSheetFunctions } from "../engine/wall-functions";
 import { mountPane } from "../pane/mount-pane";
 import { installBlockWriter } from "./block-writer";
+import { chartMarks } from "./chart-marks";
 import { dialogs } from "./dialogs";
 import { gridHost } from "./grid-host";
 import { pageLibraries, type GridModel } from "./grid-library";
@@ -20,6 +21,7 @@ async function start(): Promise<void> {
   prepareEngine(library, wallSheetFunctions());
   installBlockWriter(library);
   trimMenus(library);
+  chartMarks((globalThis as unknown as { Chart: Parameters<typeof chartMarks>[0] }).Chart);
   const model = new library.Model(starterBook());
   await mountGrid(owl, library, model, byId("grid"), dialogs(byId("notice")));
   mountPane(byId("pane"), gridHost(model), catalogue);

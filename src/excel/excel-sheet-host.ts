@@ -3,6 +3,7 @@ import type { SheetHost } from "../pane/sheet-host";
 import { excelChart } from "./excel-chart";
 import { rangeOf } from "./range-of";
 import { readBlock } from "./read-block";
+import { tableAt } from "./table-at";
 import { wallCellsOf } from "./wall-cells-of";
 
 /** The pane's SheetHost on Office.js. Every method is one batch, with as few round trips as its answers allow. */
@@ -35,6 +36,8 @@ export function excelSheetHost(): SheetHost {
       }),
     insertChart: (chart) => batch((context) => excelChart(context, chart)),
     wallCells: () => batch(wallCellsOf),
+    tableAt: (at) => batch((context) => tableAt(context, at)),
+    // No saveFile: the desktop hosts' web view drops downloads without a word.
     goTo: (block) =>
       batch(async (context) => {
         context.workbook.worksheets.getItem(block.sheet).activate();

@@ -37,7 +37,8 @@ export function calledFunctions(formula: string): string[] {
   return [...names];
 }
 
-function callArguments(formula: string, name: string): string[] | undefined {
+/** The arguments of the first call of `name` (with its namespace) in a formula, as written; undefined where it is not called. */
+export function callArguments(formula: string, name: string): string[] | undefined {
   const at = withoutStrings(formula).toUpperCase().indexOf(name + "(");
   if (at < 0) return undefined;
   const found: string[] = [];

@@ -3,6 +3,7 @@ import type { CatalogueEntry } from "../cells/catalogue-entry";
 import { element } from "./element";
 import { functionCard, type FunctionCard } from "./function-card";
 import { functionList } from "./function-list";
+import { lookPage } from "./look-page";
 import { selectedCell } from "./selected-cell";
 import type { SheetHost } from "./sheet-host";
 
@@ -27,30 +28,51 @@ export function mountPane(root: HTMLElement, host: SheetHost, catalogue: readonl
   const list = functionList(catalogue, (entry) => showCard(entry), say);
   const cell = selectedCell(catalogue, host, (entry) => showCard(entry));
 
+  const openByName = (name: string) => {
+    const entry = catalogue.find((e) => e.name === name);
+    if (entry) showCard(entry);
+    else showList();
+  };
+  const look = lookPage(host, openByName, say);
+  const pages = { Find: () => body.replaceChildren(card?.root ?? list.root), Look: () => body.replaceChildren(look.root) };
+  let page: keyof typeof pages = "Find";
+  const tabs = (Object.keys(pages) as (keyof typeof pages)[]).map((name) => element("button", { type: "button", class: "wl-tab", click: () => turnTo(name) }, name));
+  function turnTo(name: keyof typeof pages): void {
+    page = name;
+    for (const tab of tabs) {
+      if (tab.textContent === name) tab.setAttribute("aria-current", "page");
+      else tab.removeAttribute("aria-current");
+    }
+    say("");
+    cell.root.hidden = name === "Look"; // it tells its table itself
+    pages[name]();
+    body.scrollTop = 0;
+    if (name === "Look") look.update().catch(complain);
+  }
+
   function showCard(entry: CatalogueEntry): void {
     const shown = functionCard(entry, host, () => showList(entry.name), say);
     card = shown;
-    say("");
-    body.replaceChildren(shown.root);
-    body.scrollTop = 0;
+    turnTo("Find");
     shown.focus();
     shown.form.fill().catch(complain);
   }
   function showList(name?: string): void {
     card = undefined;
-    say("");
-    body.replaceChildren(list.root);
+    turnTo("Find");
     list.focusOn(name);
   }
   const update = () => {
     cell.update().catch(complain);
-    card?.form.follow().catch(complain);
+    if (page === "Look") look.update().catch(complain);
+    else card?.form.follow().catch(complain);
   };
 
-  body.append(list.root);
+  turnTo("Find");
   root.classList.add("wl-pane");
   root.replaceChildren(
     element("div", { class: "wl-header" }, element("h1", {}, "Wallsheet"), element("span", { class: "wl-quiet" }, `functions in ${host.name}`)),
+    element("nav", { class: "wl-tabs", "aria-label": "Pages of the pane" }, ...tabs),
     cell.root,
     body,
     status,
@@ -59,11 +81,7 @@ export function mountPane(root: HTMLElement, host: SheetHost, catalogue: readonl
   const stop = host.whenChanged(update);
   update();
   return {
-    open(name) {
-      const entry = catalogue.find((e) => e.name === name);
-      if (entry) showCard(entry);
-      else showList();
-    },
+    open: openByName,
     close() {
       stop();
       root.replaceChildren();

@@ -53,6 +53,10 @@ export interface SheetHost {
   insertChart(chart: ChartRequest): Promise<void>;
   /** Every WALL cell of the book, sheet by sheet, row by row. */
   wallCells(): Promise<readonly WallCell[]>;
+  /** The WALL cell that stands at the block's first cell or spills over it; undefined where neither is so. */
+  tableAt(at: CellBlock): Promise<WallCell | undefined>;
+  /** Gives the user a file to keep. Left out where the host lets no file out of its page; the pane then offers to copy instead. */
+  saveFile?(name: string, content: Blob): Promise<void>;
   /** Selects the block and brings it into view. */
   goTo(block: CellBlock): Promise<void>;
   /** Calls back after the selection moved or cells changed; gives the function that ends it. */

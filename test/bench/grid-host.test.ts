@@ -98,6 +98,14 @@ describe("the grid as a sheet host", () => {
     expect((await host.read(block("'More data'!A1")))[0]![0]!.value).toBe(7);
   });
 
+  test("the table over a cell is found from its own cell and from any cell it spills over", async () => {
+    const table = { at: block("C2"), formula: "=WALL.TWICE(A2:A3)", spill: block("C2:C3") };
+    expect(await host.tableAt(block("C2"))).toEqual(table);
+    expect(await host.tableAt(block("C3:D9"))).toEqual(table);
+    expect((await host.tableAt(block("D2")))!.error!.sentence).toContain("TWICE needs numbers");
+    for (const other of ["A2", "E2", "H20"]) expect(await host.tableAt(block(other))).toBeUndefined();
+  });
+
   it("lists the WALL cells of every sheet with their spills and errors", async () => {
     expect(await host.wallCells()).toEqual([
       { at: block("C2"), formula: "=WALL.TWICE(A2:A3)", spill: block("C2:C3") },

@@ -42,6 +42,10 @@ test("Excel's pane page loads functions and pane, asks only for Office's own scr
   await page.goto(new URL("taskpane.html", server.address).href);
   await page.getByRole("button", { name: /^THWAITES_MARCH/ }).waitFor();
   await page.getByText("Select one block of cells").waitFor();
+  await page.getByRole("button", { name: "Look", exact: true }).click();
+  await page.getByRole("status").getByText("Select one block of cells").waitFor();
+  assert.equal(await page.getByRole("button", { name: /^Save / }).count(), 0, "Excel's page gives out no files; copying is offered instead");
+  assert.equal(await page.getByText("Copy what is shown").count(), 1);
   assert.equal(await page.evaluate(() => Object.keys((globalThis as unknown as { CustomFunctions: { associated: object } }).CustomFunctions.associated).includes("THWAITES_MARCH")), true);
   assert.equal(await page.evaluate(() => document.documentElement.scrollWidth <= 320), true);
   await page.screenshot({ path: path.join(OUTPUT, "excel-pane.png") });

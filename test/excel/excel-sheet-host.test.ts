@@ -70,6 +70,15 @@ test("WALL cells are found on every sheet, in any case, once a spill, and not in
   expect(book.syncs).toBe(3);
 });
 
+test("the table over a cell is found from its own cell and from any cell it spills over, in two round trips", async () => {
+  const table = { at: block("Wing data", 1, 1), formula: "=WALL.THWAITES_MARCH(A2:A3,A2:A3,1E-5)", spill: block("Wing data", 1, 1, 2, 2) };
+  expect(await host.tableAt(block("Wing data", 1, 1))).toEqual(table);
+  expect(book.syncs).toBe(2);
+  expect(await host.tableAt(block("Wing data", 2, 1, 5, 9))).toEqual(table);
+  expect(await host.tableAt(block("Wing data", 3, 3))).toMatchObject({ at: block("Wing data", 3, 3), error: { code: "#VALUE!" } });
+  for (const [column, row] of [[0, 1], [4, 3], [9, 9]] as const) expect(await host.tableAt(block("Wing data", column, row))).toBeUndefined();
+});
+
 test("a chart gets its series, x column, labels and place", async () => {
   await host.insertChart({
     title: "Growth", x: block("Wing data", 0, 1, 0, 2), xLabel: "x, m", yLabel: "θ, m", at: block("Wing data", 6, 0),

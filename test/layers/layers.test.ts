@@ -24,6 +24,7 @@ function cruise(): { code: number | null; output: string } {
 }
 
 test("imports in the agreed direction pass", () => {
+  plant("src/chart/frame.ts", 'import { scaleLog } from "d3-scale"; import { line } from "d3-shape"; export const frame = [scaleLog, line];');
   expect(cruise().code).toBe(0);
 });
 
@@ -31,6 +32,10 @@ test.each([
   ["physics importing cells", "src/physics/march.ts", 'import { speed } from "../cells/speed"; export const march = speed;', "physics uses only"],
   ["numerics importing a package", "src/numerics/zip.ts", 'import { zipSync } from "fflate"; export const zip = zipSync;', "use no package"],
   ["cells reading files", "src/cells/files.ts", 'import { readFileSync } from "node:fs"; export const read = readFileSync;', "use no package"],
+  ["chart importing cells", "src/chart/line.ts", 'import { speed } from "../cells/speed"; export const line = speed;', "chart uses only itself"],
+  ["chart importing a package that is not its own", "src/chart/zip.ts", 'import { zipSync } from "fflate"; export const zip = zipSync;', "chart takes plain data"],
+  ["chart reading files", "src/chart/files.ts", 'import { readFileSync } from "node:fs"; export const read = readFileSync;', "chart takes plain data"],
+  ["the pane drawing by itself", "src/pane/draw.ts", 'import { scaleLog } from "d3-scale"; export const draw = scaleLog;', "only chart draws"],
   ["a circle", "src/numerics/root.ts", 'import { other } from "./other"; export const root = other;', "no circles"],
   ["a room outside the plan", "src/utils/any.ts", 'import { root } from "../numerics/root"; export const any = root;', "no room outside the plan"],
 ])("a planted wrong import fails: %s", (_what, file, text, rule) => {
