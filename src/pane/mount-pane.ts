@@ -3,6 +3,7 @@ import type { CatalogueEntry } from "../cells/catalogue-entry";
 import { element } from "./element";
 import { functionCard, type FunctionCard } from "./function-card";
 import { functionList } from "./function-list";
+import { checkPage } from "./check-page";
 import { lookPage } from "./look-page";
 import { selectedCell } from "./selected-cell";
 import type { SheetHost } from "./sheet-host";
@@ -34,7 +35,12 @@ export function mountPane(root: HTMLElement, host: SheetHost, catalogue: readonl
     else showList();
   };
   const look = lookPage(host, openByName, say);
-  const pages = { Find: () => body.replaceChildren(card?.root ?? list.root), Look: () => body.replaceChildren(look.root) };
+  const check = checkPage(host, say);
+  const pages = {
+    Find: () => body.replaceChildren(card?.root ?? list.root),
+    Look: () => body.replaceChildren(look.root),
+    Check: () => body.replaceChildren(check.root),
+  };
   let page: keyof typeof pages = "Find";
   const tabs = (Object.keys(pages) as (keyof typeof pages)[]).map((name) => element("button", { type: "button", class: "wl-tab", click: () => turnTo(name) }, name));
   function turnTo(name: keyof typeof pages): void {
@@ -48,6 +54,7 @@ export function mountPane(root: HTMLElement, host: SheetHost, catalogue: readonl
     pages[name]();
     body.scrollTop = 0;
     if (name === "Look") look.update().catch(complain);
+    if (name === "Check") check.run().catch(complain);
   }
 
   function showCard(entry: CatalogueEntry): void {
