@@ -47,6 +47,7 @@ export function surfaceCurve(x: Float64Array, y: Float64Array): Outcome<{ surfac
     if (!sx.ok) return { ...sx, argument: "x" };
     if (!sy.ok) return { ...sy, argument: "y" };
     const arc = arcLengths(sx.curve, sy.curve, rule.node, rule.weight);
+    if (!arc.every(Number.isFinite)) return refuse("not finite", { argument: "x" });
     const change = Math.abs(arc.at(-1)! - length.at(-1)!);
     const settled = change <= SETTLED * arc.at(-1)!;
     if (settled || x.length === 2) return { ok: true, surface: { x: sx.curve, y: sy.curve, length: arc } };

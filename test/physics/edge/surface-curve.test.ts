@@ -59,3 +59,9 @@ test("length scales with the contour and does not change when it is turned or re
 test("a repeated neighbour is refused with its row", () => {
   expect(surfaceCurve(Float64Array.of(0, 1, 1), Float64Array.of(0, 1, 1))).toMatchObject({ ok: false, reason: "repeats a point", row: 3 });
 });
+
+test("points so unlike that the arc overflows are refused, not given an endless length", () => {
+  const x = Float64Array.of(0, 0, 1.210184973390412e-122, 0, 1.2101849733904122e-122, 0, 0);
+  const y = Float64Array.of(0, 5e-324, 0, 0, 0, 0, -2.042413489619006e93);
+  expect(surfaceCurve(x, y)).toMatchObject({ ok: false });
+});
