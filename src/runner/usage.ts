@@ -5,6 +5,7 @@ export const USAGE = {
 usage: wallsheet COMMAND [ARGUMENTS] [--help]
 
   recalc IN.xlsx -o OUT.xlsx   recalculate a workbook: WALL cells, what they read and what reads them
+  freeze BOOK.xlsx [-o OUT]    a plain copy: values in place of WALL cells, and a sheet of method notes
   eval FORMULA                 calculate one formula and print it
   list [NAME]                  list the functions, or show one with its limits and sources
 
@@ -29,6 +30,20 @@ changes by itself (NOW, TODAY, RAND …) keep theirs too, so that a second run c
 
 The report goes to standard error, one line a cell. Exit status: 0; 1 if a cell shows an error or could not be calculated; 2 if a file cannot be
 read or written. The output appears whole or not at all.`,
+  freeze: `wallsheet freeze BOOK.xlsx [-o OUT.xlsx] [--date YYYY-MM-DD]
+
+Writes a copy for someone without Wallsheet. The book is recalculated first as by recalc; then every cell that calls a WALL function, and the block
+it spilled, becomes plain values, and spill references to it (D3#) become plain ranges. A new last sheet, "method notes", tells for each of these
+cells: formula, inputs, method, valid range, sources and warnings. Everything else stays byte for byte.
+
+  -o, --output FILE   where to write; BOOK-plain.xlsx beside the book unless told
+      --date DAY      the day to stand in the notes; today unless told
+      --as-stored     freeze the values the file holds, without calculating
+  -q, --quiet         report nothing but failures to read or write
+  -h, --help          this text
+
+The report goes to standard error as recalc's does. Exit status: 0; 1 if a cell shows an error or could not be calculated; 2 if a file cannot be
+read or written.`,
   eval: `wallsheet eval FORMULA
 
 Calculates one formula and prints its value, or its table as tab-separated lines. Quote it for the shell:
