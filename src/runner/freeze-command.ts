@@ -62,11 +62,11 @@ function frozenBook(bytes: Uint8Array, date: string, asStored: boolean): { bytes
     version: project.version,
     date,
     cautions: CAUTIONS,
-    warnings: ({ sheet, cell }, values) => {
-      const remarks = tableRemarks(values);
+    remarks: ({ sheet, cell }, values) => {
+      const { beyond, notes: noted } = tableRemarks(values);
       const known = said.get(placeKey(sheet.name, cell.reference));
       const own = known ?? (cell.value !== null && typeof cell.value === "object" ? `shows ${cell.value.error}` : cell.value === null ? "held no value when it was frozen" : undefined);
-      return [...(asStored ? ["the value as the file held it, not calculated anew for this copy"] : []), ...(own === undefined ? [] : [own]), ...remarks.beyond, ...remarks.notes];
+      return { warnings: [...(asStored ? ["the value as the file held it, not calculated anew for this copy"] : []), ...(own === undefined ? [] : [own]), ...beyond], notes: noted };
     },
   });
   if (copy.cells.length === 0) return { bytes, notes: [], remaining: copy.remaining, cells: 0, notesSheet: "" };

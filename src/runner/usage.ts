@@ -6,13 +6,14 @@ usage: wallsheet COMMAND [ARGUMENTS] [--help]
 
   recalc IN.xlsx -o OUT.xlsx   recalculate a workbook: WALL cells, what they read and what reads them
   freeze BOOK.xlsx [-o OUT]    a plain copy: values in place of WALL cells, and a sheet of method notes
+  audit BOOK.xlsx              look at every WALL cell: state, inputs, valid range, notes
   eval FORMULA                 calculate one formula and print it
   list [NAME]                  list the functions, or show one with its limits and sources
 
   -h, --help       this text; after a command, that command's
   -V, --version    the version
 
-exit status: 0 all well; 1 something could not be calculated; 2 wrong usage or unreadable file
+exit status: 0 all well; 1 something could not be calculated, or audit found something; 2 wrong usage or unreadable file
 
 Results are preliminary-design estimates: check them against test or a higher-order method.`,
   recalc: `wallsheet recalc IN.xlsx -o OUT.xlsx
@@ -44,6 +45,21 @@ cells: formula, inputs, method, valid range, sources and warnings. Everything el
 
 The report goes to standard error as recalc's does. Exit status: 0; 1 if a cell shows an error or could not be calculated; 2 if a file cannot be
 read or written.`,
+  audit: `wallsheet audit BOOK.xlsx [--format table|json|csv]
+
+Recalculates the book without writing it, and tells of every WALL cell: address, functions, and its state
+  calculated   the stored values are what comes out, to 13 digits
+  stale        other values come out than are stored
+  error        an error comes out; its sentence stands beside it
+  left         it cannot be calculated here; the reason stands beside it
+then what INPUT_CHECK finds amiss in the x, ue and nu of its marches, where its table says that the method's valid range ends (separated, out of
+range, …), and the notes of its table. A table without the columns state and note can tell neither.
+
+      --format FORM   table (for reading), json or csv
+  -q, --quiet         no summary on standard error
+  -h, --help          this text
+
+Exit status: 0 nothing found; 1 a cell is not as calculated, an input is amiss or a range is left; 2 if the file cannot be read.`,
   eval: `wallsheet eval FORMULA
 
 Calculates one formula and prints its value, or its table as tab-separated lines. Quote it for the shell:

@@ -24,8 +24,8 @@ export interface NotesRequest {
   /** Day of the copy as it is to stand in the notes, e.g. `2026-12-01`. */
   date: string;
   cautions: readonly string[];
-  /** Warnings about a cell, from its block of stored values (rows × columns, blank = null) or from elsewhere. */
-  warnings(cell: WallCell, values: readonly (readonly StoredValue[])[]): readonly string[];
+  /** Warnings and notes about a cell, from its block of stored values (rows × columns, blank = null) or from elsewhere. */
+  remarks(cell: WallCell, values: readonly (readonly StoredValue[])[]): { warnings: readonly string[]; notes: readonly string[] };
 }
 
 /** Rows of a block that are read for warnings; more no march has. */
@@ -59,6 +59,7 @@ export function methodNotes(
     const several = functions.length > 1;
     const of = (name: string, text: string) => (several ? `${name}: ${text}` : text);
     const known = functions.map((name) => methods.find((m) => m.name === name) ?? { name, purpose: `${name} is unknown to this version of Wallsheet.`, limits: [], sources: [] });
+    const { warnings, notes } = request.remarks(wall, blockValues(wall));
     const items: [string, string][] = [
       ["formula", shownSpelling(withoutBrokenBook(formula), names)],
       ["values in", boxName(box)],
@@ -66,7 +67,8 @@ export function methodNotes(
       ...known.map((m): [string, string] => ["method", `${m.name}: ${m.purpose}`]),
       ...known.flatMap((m) => m.limits.map((text): [string, string] => ["valid range", of(m.name, text)])),
       ...known.flatMap((m) => m.sources.map((text): [string, string] => ["source", of(m.name, text)])),
-      ...request.warnings(wall, blockValues(wall)).map((text): [string, string] => ["warning", text]),
+      ...warnings.map((text): [string, string] => ["warning", text]),
+      ...notes.map((text): [string, string] => ["note", text]),
     ];
     return items.map(([item, text]) => [sheet.name, cell.reference, item, text]);
   });
