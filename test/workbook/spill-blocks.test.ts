@@ -1,7 +1,12 @@
+import type { CellBox } from "../../src/workbook/cell-reference";
 import { spillBlocks, type BlockOf } from "../../src/workbook/spill-blocks";
 
-const blockOf: BlockOf = (sheet, reference) =>
-  ({ "undefined!D3": { left: 4, top: 3, right: 7, bottom: 18 }, "Läufe 'B'!D3": { left: 4, top: 3, right: 4, bottom: 5 }, "undefined!M8": { left: 13, top: 8, right: 13, bottom: 8 } })[`${sheet}!${reference}`];
+const BLOCKS: Readonly<Record<string, CellBox>> = {
+  "D3": { left: 4, top: 3, right: 7, bottom: 18 },
+  "M8": { left: 13, top: 8, right: 13, bottom: 8 },
+  "Läufe 'B'!D3": { left: 4, top: 3, right: 4, bottom: 5 },
+};
+const blockOf: BlockOf = (sheet, reference) => BLOCKS[sheet === undefined ? reference : `${sheet}!${reference}`];
 
 test.each([
   ["SUM(_xlfn.ANCHORARRAY(D3))", "SUM(D3:G18)"],
