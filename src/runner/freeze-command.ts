@@ -3,6 +3,7 @@ import path from "node:path";
 import { parseArgs } from "node:util";
 import project from "../../package.json";
 import { CAUTIONS } from "../cells/cautions";
+import { catalogue } from "../cells/generated/catalogue";
 import { tableRemarks } from "../cells/reading/table-remarks";
 import { placeKey } from "../workbook/place-key";
 import { plainCopy } from "../workbook/plain-copy";
@@ -11,7 +12,6 @@ import { WorkbookError } from "../workbook/workbook-error";
 import { refused, type CommandResult } from "./command-result";
 import { engineHere } from "./engine-here";
 import { isSameFile, systemWords } from "./file-words";
-import { METHOD_RECORDS } from "./method-records";
 import { recalculate, type RecalcNote } from "./recalculate";
 import { USAGE } from "./usage";
 import { writeWhole } from "./write-whole";
@@ -58,7 +58,7 @@ function frozenBook(bytes: Uint8Array, date: string, asStored: boolean): { bytes
   const { bytes: current, notes } = asStored ? { bytes, notes: [] } : recalculate(engineHere(), bytes);
   const said = new Map(notes.map((n) => [placeKey(n.sheet, n.cell), n.text]));
   const copy = plainCopy(readWorkbook(current), {
-    methods: METHOD_RECORDS,
+    methods: catalogue,
     version: project.version,
     date,
     cautions: CAUTIONS,

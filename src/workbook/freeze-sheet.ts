@@ -61,6 +61,7 @@ function mendedElsewhere(xml: string, mended: (formula: string, reference: strin
   const end = xml.search(/<\/(?:[\w.-]+:)?sheetData\s*>|<(?:[\w.-]+:)?sheetData\s*\/>/);
   if (end < 0) return [];
   return OUTSIDE_CELLS.flatMap((name) => elements(xml.slice(end), name)).flatMap(({ inside, at, length }) => {
+    if (inside.includes("<")) return []; // newer kinds hold their formula in an element of its own, which is found by itself
     const old = plainXml(inside);
     const text = mended(old, "A1");
     if (text === old) return [];

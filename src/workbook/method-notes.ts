@@ -6,7 +6,7 @@ import type { StoredValue } from "./read-sheet";
 import { shownSpelling } from "./stored-spelling";
 import type { WallCell } from "./wall-cells";
 
-/** What is known of one of our functions. */
+/** What is known of one of our functions; the catalogue's entries are such. */
 export interface MethodRecord {
   /** Without the namespace, e.g. `THWAITES_MARCH`. */
   name: string;

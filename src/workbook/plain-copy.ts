@@ -64,7 +64,7 @@ export function plainCopy(book: Workbook, request: NotesRequest): PlainCopy {
   const withNotes = addSheet({ ...book.package, parts: chained }, book.part, { name: notesSheet, xml: (namespace) => textSheet(namespace, rows.rows, WIDTHS, rows.headingRows) });
   return { bytes: writePackage({ ...book.package, parts: withNotes }), cells, notesSheet, remaining };
 
-  /** The formula by which a table fills its new rows goes away where it calls one of our functions. */
+  /** The formula by which a table fills its new rows goes away where it calls one of our functions, and reads blocks where it read spills. */
   function mendTable(part: string): void {
     const old = partText(book.package, part);
     const xml = old.replace(/<((?:[\w.-]+:)?calculatedColumnFormula)(?=[\s>])[^>]*>([\s\S]*?)<\/\1\s*>/g, (whole, _name, inside: string) => (callsWall(plainXml(inside)) ? "" : whole));
@@ -76,7 +76,7 @@ export function plainCopy(book: Workbook, request: NotesRequest): PlainCopy {
     const ofSheets = sheets.flatMap(({ name, xml }) => {
       const tail = xml.slice(Math.max(0, xml.search(/<\/(?:[\w.-]+:)?sheetData\s*>/)));
       return (["conditionalFormatting", "dataValidation"] as const)
-        .filter((element) => elements(tail, element).some((e) => ["f", "formula", "formula1", "formula2"].some((f) => elements(e.inside, f).some((x) => callsWall(plainXml(x.inside))))))
+        .filter((element) => elements(tail, element).some((e) => ["f", "formula", "formula1", "formula2"].some((f) => elements(e.inside, f).some((x) => !x.inside.includes("<") && callsWall(plainXml(x.inside))))))
         .map((element) => `a ${element === "dataValidation" ? "validation" : "conditional format"} of the sheet ${name}`);
     });
     return [...ofNames, ...ofSheets];

@@ -77,9 +77,10 @@ describe("plainCopy", () => {
       bookOf({
         rows: '<row r="1"><c r="A1" cm="1"><f t="array" ref="A1:A2">_xldudf_WALL_EDGE_SPEED({1;0},10)</f><v>0</v></c><c r="C1"><f t="shared" ref="C1:C2" si="0">SUM(_xlfn.ANCHORARRAY(A1))&lt;5</f><v>1</v></c><c r="D1" cm="1"><f t="array" ref="D1">MAX(_xlfn.ANCHORARRAY(list))</f><v>1</v></c></row><row r="2"><c r="A2"><v>10</v></c><c r="C2"><f t="shared" si="0"/><v>1</v></c></row>',
         names: '<definedNames><definedName name="list">S!$A$1</definedName><definedName name="all">_xlfn.ANCHORARRAY(S!$A$1)</definedName></definedNames>',
-        tail: '<conditionalFormatting sqref="B1"><cfRule type="expression"><formula>COUNT(_xlfn.ANCHORARRAY($A$1))&gt;1</formula></cfRule></conditionalFormatting><dataValidations><dataValidation type="list"><formula1>_xlfn.ANCHORARRAY($A$1)</formula1></dataValidation></dataValidations>',
+        tail: '<conditionalFormatting sqref="B1"><cfRule type="expression"><formula>COUNT(_xlfn.ANCHORARRAY($A$1))&gt;1</formula></cfRule></conditionalFormatting><dataValidations><dataValidation type="list"><formula1>_xlfn.ANCHORARRAY($A$1)</formula1></dataValidation></dataValidations><extLst><ext><x14:dataValidation><x14:formula1><xm:f>_xlfn.ANCHORARRAY(S!$A$1)</xm:f></x14:formula1></x14:dataValidation></ext></extLst>',
       }),
     );
+    expect(parts[SHEET]).toContain("<x14:formula1><xm:f>S!$A$1:$A$2</xm:f></x14:formula1>");
     expect(inside(parts)).toContain('<c r="C1"><f>SUM(A1:A2)&lt;5</f><v>1</v></c><c r="D1" cm="1"><f t="array" ref="D1">MAX(S!$A$1:$A$2)</f><v>1</v></c>');
     // The second cell of the shared formula read A2#, which is no frozen spill: it keeps its own text.
     expect(inside(parts)).toContain('<c r="C2"><f>SUM(_xlfn.ANCHORARRAY(A2))&lt;5</f><v>1</v></c>');
@@ -92,10 +93,10 @@ describe("plainCopy", () => {
     const { remaining } = copied(
       bookOf({
         rows: '<row r="1"><c r="A1"><f>WALL.EDGE_SPEED(0,1)</f><v>1</v></c></row>',
-        tail: '<conditionalFormatting sqref="B1"><cfRule type="expression"><formula>WALL.EDGE_SPEED(0,1)&gt;1</formula></cfRule></conditionalFormatting><dataValidations><dataValidation><formula1>1</formula1></dataValidation></dataValidations>',
+        tail: '<conditionalFormatting sqref="B1"><cfRule type="expression"><formula>WALL.EDGE_SPEED(0,1)&gt;1</formula></cfRule></conditionalFormatting><dataValidations><dataValidation><formula1>1</formula1></dataValidation></dataValidations><x14:dataValidation><x14:formula1><xm:f>WALL.EDGE_SPEED(0,1)</xm:f></x14:formula1></x14:dataValidation>',
       }),
     );
-    expect(remaining).toEqual(["a conditional format of the sheet S"]);
+    expect(remaining).toEqual(["a conditional format of the sheet S", "a validation of the sheet S"]);
   });
 
   it("drops the calculation chain whole, with link and content type, and a table's own WALL formula", () => {
