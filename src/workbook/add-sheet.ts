@@ -1,5 +1,6 @@
 import { strToU8 } from "fflate";
 import { partText, type BookPackage } from "./open-package";
+import { WorkbookError } from "./workbook-error";
 import { attributes } from "./xml-text";
 
 const SHEET_CONTENT = "application/vnd.openxmlformats-officedocument.spreadsheetml.worksheet+xml";
@@ -51,7 +52,8 @@ export function firstFree(name: (n: number) => string, isTaken: (name: string) =
 
 /** Text put before an element's end tag, in the element's own prefix. */
 function beforeEnd(xml: string, element: string, text: (prefix: string) => string): string {
-  const m = new RegExp(`</([\\w.-]+:)?${element}\\s*>`).exec(xml)!;
+  const m = new RegExp(`</([\\w.-]+:)?${element}\\s*>`).exec(xml);
+  if (!m) throw new WorkbookError(`The file is damaged: an end tag of ${element} is missing in it.`);
   return xml.slice(0, m.index) + text(m[1] ?? "") + xml.slice(m.index);
 }
 

@@ -139,4 +139,17 @@ describe("plainCopy", () => {
     expect(Buffer.from(plainCopy(book, request).bytes).equals(Buffer.from(once))).toBe(true);
     expect(Buffer.from(plainCopy(readWorkbook(bytes), request).bytes).equals(Buffer.from(once))).toBe(true);
   });
+
+  it("takes a block that claims the whole sheet in its stride, and refuses damaged packages in a sentence", () => {
+    const bytes = bookOf({ rows: '<row r="1"><c r="A1" cm="1"><f t="array" ref="A1:XFD1048576">WALL.EDGE_SPEED(0,1)</f><v>1</v></c><c r="B1" cm="1"><v>2</v></c></row>' });
+    const { parts } = copied(bytes);
+    expect(inside(parts)).toBe('<row r="1"><c r="A1"><v>1</v></c><c r="B1"><v>2</v></c></row>');
+    const damaged = (change: (files: Record<string, Uint8Array>) => void) => {
+      const files = unzipSync(bytes);
+      change(files);
+      return () => plainCopy(readWorkbook(zipSync(files)), request);
+    };
+    expect(damaged((files) => delete files["[Content_Types].xml"])).toThrow(/part \[Content_Types\]\.xml is missing/);
+    expect(damaged((files) => (files["[Content_Types].xml"] = strToU8("<Types/>")))).toThrow(/an end tag of Types is missing/);
+  });
 });
