@@ -1,7 +1,8 @@
 import type { Engine, EngineModel } from "../engine/types";
-import { boxSize, cellBox, cellPlace, columnLetters, type CellBox } from "../workbook/cell-reference";
-import { cellsOf } from "../workbook/patch-sheet";
-import { formulaReader, sharedFormulaAt } from "../workbook/plain-formula";
+import { cellFormulas } from "../workbook/cell-formulas";
+import { cellBox, cellPlace, columnLetters } from "../workbook/cell-reference";
+import { cellsInside } from "../workbook/cells-inside";
+import { formulaReader } from "../workbook/plain-formula";
 import type { StoredCell, StoredValue } from "../workbook/read-sheet";
 import { WorkbookError } from "../workbook/workbook-error";
 import type { BookSheet, Workbook } from "../workbook/read-workbook";
@@ -49,11 +50,10 @@ export function bookModel(engine: Engine, book: Workbook): BookModel {
   const sheets = book.sheets.map((sheet): ModelSheet => {
     const formulas = new Map<string, ModelFormula>();
     const spilled = new Map<string, string>();
-    const shared = new Map<string, StoredCell>();
-    for (const cell of sheet.cells.values()) if (cell.formula?.kind === "shared" && cell.formula.text !== "") shared.set(cell.formula.shared ?? "", cell);
+    const texts = cellFormulas(sheet.cells);
     for (const cell of sheet.cells.values()) {
       if (!cell.formula) continue;
-      const text = cell.formula.kind === "dataTable" ? "" : formulaText(cell, shared);
+      const text = cell.formula.kind === "dataTable" ? "" : texts.get(cell.reference);
       if (text === undefined) continue;
       const plain = read(text, sheet.name, cellPlace(cell.reference));
       const left = whyLeft(cell, plain);
@@ -61,7 +61,7 @@ export function bookModel(engine: Engine, book: Workbook): BookModel {
     }
     for (const { cell } of formulas.values()) {
       if (cell.formula?.kind !== "array" || cell.formula.ref === undefined) continue;
-      for (const reference of storedIn(cellBox(cell.formula.ref), sheet.cells)) if (reference !== cell.reference && !formulas.has(reference)) spilled.set(reference, cell.reference);
+      for (const reference of cellsInside(cellBox(cell.formula.ref), sheet.cells)) if (reference !== cell.reference && !formulas.has(reference)) spilled.set(reference, cell.reference);
     }
     return { sheet, id: alias(sheet.name), formulas, spilled };
   });
@@ -72,15 +72,6 @@ export function bookModel(engine: Engine, book: Workbook): BookModel {
 export function isSpilled({ formulas, spilled }: Pick<ModelSheet, "formulas" | "spilled">, reference: string): boolean {
   const source = spilled.get(reference);
   return source !== undefined && formulas.get(source)?.left === undefined;
-}
-
-/** The stored cells of a block, found the shorter way: a hostile file may claim a block of the whole sheet. */
-function storedIn(box: CellBox, cells: ReadonlyMap<string, StoredCell>): string[] {
-  if (boxSize(box) <= cells.size) return cellsOf(box).filter((reference) => cells.has(reference));
-  return [...cells.keys()].filter((reference) => {
-    const { row, column } = cellPlace(reference);
-    return row >= box.top && row <= box.bottom && column >= box.left && column <= box.right;
-  });
 }
 
 /** The engine's model; formulas named in `single` give their first value only, as an old workbook's plain cells do. */
@@ -124,14 +115,6 @@ function gridSize(sheet: string, used: Record<string, string>, stored: ReadonlyM
     throw new WorkbookError(`The sheet ${sheet} is used as far as row ${rows} and column ${columnLetters(columns)}; sheets of more than ${MOST_ROWS} rows or ${MOST_COLUMNS} columns are not calculated here.`);
   }
   return { rowNumber: lowestArray + rows + SPARE_ROWS, colNumber: columns + SPARE_COLUMNS };
-}
-
-function formulaText(cell: StoredCell, shared: ReadonlyMap<string, StoredCell>): string | undefined {
-  const { formula } = cell;
-  if (!formula) return undefined;
-  if (formula.kind !== "shared" || formula.text !== "") return formula.text === "" ? undefined : formula.text;
-  const master = shared.get(formula.shared ?? "");
-  return master?.formula && sharedFormulaAt(master.formula.text, master.reference, cell.reference);
 }
 
 function constantText(value: StoredValue): string | undefined {

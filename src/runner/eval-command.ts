@@ -2,6 +2,7 @@ import { parseArgs } from "node:util";
 import { evaluateFormula } from "../engine/evaluate";
 import { SheetError, type SheetValue } from "../engine/sheet-function";
 import { refused, type CommandResult } from "./command-result";
+import { csvCell } from "./csv-cell";
 import { engineHere } from "./engine-here";
 import { USAGE } from "./usage";
 
@@ -21,7 +22,7 @@ export function evalCommand(args: readonly string[]): CommandResult {
   if (result instanceof SheetError) return { status: 1, out: "", complaints: [result.message === "" ? result.code : `${result.code} ${result.message}`] };
   const rows = Array.isArray(result) ? result : [[result]];
   const failed = rows.flat().filter((v) => v instanceof SheetError);
-  const out = values.json ? JSON.stringify(Array.isArray(result) ? rows.map((r) => r.map(plain)) : plain(result)) + "\n" : rows.map((r) => r.map(values.csv ? csvCell : textCell).join(values.csv ? "," : "\t") + "\n").join("");
+  const out = values.json ? JSON.stringify(Array.isArray(result) ? rows.map((r) => r.map(plain)) : plain(result)) + "\n" : rows.map((r) => r.map(values.csv ? (v) => csvCell(typeof v === "string" ? v : shown(v), typeof v === "string") : textCell).join(values.csv ? "," : "\t") + "\n").join("");
   return { status: failed.length > 0 ? 1 : 0, out, complaints: failed.map((e) => `${e.code} ${e.message}`.trim()) };
 }
 
@@ -31,12 +32,6 @@ function plain(value: SheetValue): number | string | boolean | null {
 
 function textCell(value: SheetValue): string {
   return shown(value).replace(/[\t\r\n]+/g, " ");
-}
-
-/** A cell of a CSV file; text that a spreadsheet would run as a formula is kept from it by an apostrophe. */
-function csvCell(value: SheetValue): string {
-  const text = typeof value === "string" && /^[=+\-@\t\r]/.test(value) ? "'" + value : shown(value);
-  return /[",\r\n]/.test(text) ? `"${text.replace(/"/g, '""')}"` : text;
 }
 
 function shown(value: SheetValue): string {

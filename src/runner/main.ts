@@ -1,12 +1,14 @@
 import { writeSync } from "node:fs";
 import project from "../../package.json";
+import { auditCommand } from "./audit-command";
 import { refused, type CommandResult } from "./command-result";
 import { evalCommand } from "./eval-command";
+import { freezeCommand } from "./freeze-command";
 import { listCommand } from "./list-command";
 import { recalcCommand } from "./recalc-command";
 import { USAGE } from "./usage";
 
-const COMMANDS: Readonly<Record<string, (args: readonly string[]) => CommandResult>> = { recalc: recalcCommand, eval: evalCommand, list: listCommand };
+const COMMANDS: Readonly<Record<string, (args: readonly string[]) => CommandResult>> = { recalc: recalcCommand, freeze: (args) => freezeCommand(args), audit: auditCommand, eval: evalCommand, list: listCommand };
 
 function run(args: readonly string[]): CommandResult {
   const [command, ...rest] = args;

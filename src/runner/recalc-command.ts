@@ -1,9 +1,9 @@
-import { readFileSync, statSync } from "node:fs";
-import path from "node:path";
+import { readFileSync } from "node:fs";
 import { parseArgs } from "node:util";
 import { WorkbookError } from "../workbook/workbook-error";
 import { refused, type CommandResult } from "./command-result";
 import { engineHere } from "./engine-here";
+import { isSameFile, systemWords } from "./file-words";
 import { recalculate } from "./recalculate";
 import { USAGE } from "./usage";
 import { writeWhole } from "./write-whole";
@@ -43,25 +43,4 @@ export function recalcCommand(args: readonly string[]): CommandResult {
     if (error instanceof WorkbookError) return refused(`${input}: ${error.message}`);
     throw error;
   }
-}
-
-/** One file under two names too: links and other spellings of the path. */
-function isSameFile(one: string, other: string): boolean {
-  if (path.resolve(one) === path.resolve(other)) return true;
-  const [a, b] = [one, other].map((file) => statSync(file, { throwIfNoEntry: false }));
-  return a !== undefined && b !== undefined && a.dev === b.dev && a.ino === b.ino;
-}
-
-/** What the operating system objects to, in words. */
-function systemWords(error: unknown): string {
-  const { code, message } = error as NodeJS.ErrnoException;
-  const words: Record<string, string> = {
-    ENOENT: "there is no such file or folder",
-    EACCES: "permission denied",
-    ENOTDIR: "a part of its path is no folder",
-    EISDIR: "it is a folder",
-    ENOSPC: "the disk is full",
-    EROFS: "the disk is read-only",
-  };
-  return words[code ?? ""] ?? message;
 }

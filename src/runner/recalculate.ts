@@ -23,6 +23,9 @@ export interface Recalculated {
   notes: RecalcNote[];
   /** Formula cells calculated, WALL cells among them, cells whose stored value changed. */
   counts: { formulas: number; wall: number; changed: number };
+  /** The calculated book in the engine, for further questions. */
+  model: EngineModel;
+  sheets: readonly ModelSheet[];
 }
 
 /** Two numbers nearer than this are one value: a workbook keeps 15 digits, and its own program may round the last one otherwise. */
@@ -47,7 +50,7 @@ export function recalculate(engine: Engine, bytes: Uint8Array): Recalculated {
     touched = true;
     changed.set(part.sheet.part, new TextEncoder().encode(xml));
   }
-  return { bytes: touched ? writePackage({ ...book.package, parts: changed }) : bytes, notes, counts };
+  return { bytes: touched ? writePackage({ ...book.package, parts: changed }) : bytes, notes, counts, model, sheets };
 }
 
 /**

@@ -2,6 +2,7 @@ import type { Engine } from "../engine/types";
 import { boxSize, cellBox } from "../workbook/cell-reference";
 import type { StoredCell } from "../workbook/read-sheet";
 import type { PlainFormula } from "../workbook/plain-formula";
+import { isWallCall } from "../workbook/wall-call";
 
 /** Why a formula is not calculated here. */
 export interface Left {
@@ -42,5 +43,5 @@ export function leftJudge(engine: Engine, from1904: boolean): (cell: StoredCell,
 
 /** The formula calls one of our functions, in either spelling. */
 export function callsWall(formula: PlainFormula): boolean {
-  return formula.functions.some((f) => /^(?:_XLDUDF_)?WALL[._]/.test(f));
+  return formula.functions.some(isWallCall);
 }

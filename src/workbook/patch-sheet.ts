@@ -12,7 +12,7 @@ export interface CellEdit {
 }
 
 /** One replacement in the part's text. */
-interface Cut {
+export interface Cut {
   at: number;
   length: number;
   text: string;
@@ -142,8 +142,8 @@ function widenDimension(xml: string, references: readonly string[], cuts: Cut[])
   cuts.push({ at: m.index + m[0].lastIndexOf(m[1]!), length: m[1]!.length, text: boxName(box) });
 }
 
-/** Cuts at one place keep the order in which they were made: cells are added in column order. */
-function applied(xml: string, cuts: readonly Cut[]): string {
+/** The text with its cuts made. Cuts at one place keep the order in which they were made: cells are added in column order. */
+export function applied(xml: string, cuts: readonly Cut[]): string {
   const ordered = cuts.map((cut, order) => ({ ...cut, order })).sort((a, b) => a.at - b.at || Number(a.length > 0) - Number(b.length > 0) || a.order - b.order);
   let out = "";
   let from = 0;

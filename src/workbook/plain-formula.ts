@@ -106,7 +106,7 @@ function bareFunction(name: string): string {
 }
 
 /** A book whose add-in link broke stores `[1]!WALL.X(…)` or `'path\[book]'!WALL.X(…)`: the call itself is what was meant. */
-function withoutBrokenBook(text: string): string {
+export function withoutBrokenBook(text: string): string {
   return text.replace(/("(?:[^"]|"")*")|(?:\[\d+\]|'(?:[^']|'')*')!(?=(?:_xldudf_)?WALL[._])/gi, (_whole, string: string | undefined) => string ?? "");
 }
 

@@ -28,6 +28,11 @@ export function xmlText(text: string): string {
     .replace(/[\u0000-\u0008\u000b\u000c\u000e-\u001f\ufffe\uffff]/g, (c) => `_x${c.charCodeAt(0).toString(16).padStart(4, "0").toUpperCase()}_`);
 }
 
+/** Characters → the inside of a formula element, which knows entities only. */
+export function formulaXml(text: string): string {
+  return text.replace(/[&<>]/g, (c) => (c === "&" ? "&amp;" : c === "<" ? "&lt;" : "&gt;"));
+}
+
 /** Attributes of a start tag's inside by name. */
 export function attributes(inside: string): Record<string, string> {
   const found: Record<string, string> = {};

@@ -18,7 +18,7 @@ describe("wallsheet", () => {
   it("explains itself", () => {
     const help = run("--help");
     expect(help).toMatchObject({ status: 0, err: "" });
-    for (const command of ["recalc", "eval", "list"]) {
+    for (const command of ["recalc", "freeze", "audit", "eval", "list"]) {
       expect(help.out).toContain(`\n  ${command} `);
       const own = run(command, "--help");
       expect(own).toMatchObject({ status: 0, err: "" });
