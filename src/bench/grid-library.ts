@@ -5,6 +5,8 @@ export interface GridModel extends EngineModel {
   getters: EngineGetters & { getSelectedZone(): EngineZone; getCells(sheetId: string): EngineCell[]; getCellPosition(cellId: number): EnginePosition };
   on(type: "update", owner: object, listener: () => void): void;
   off(type: "update", owner: object): void;
+  exportData(): Record<string, unknown>;
+  session: { getRevisionId(): string };
   selection: {
     selectZone(anchor: { cell: { col: number; row: number }; zone: EngineZone }): unknown;
   };
@@ -20,6 +22,8 @@ export interface GridLibrary extends EngineLibrary {
   Spreadsheet: unknown;
   /** Base of plugins; `dispatch` inside `handle` makes sub-commands. */
   UIPlugin: new (config: unknown) => { dispatch(command: string, payload: Record<string, unknown>): unknown };
+  /** Makes the data form out of an .xlsx file's parts. */
+  load(parts: Record<string, string>): Record<string, unknown>;
   DEFAULT_LOCALES: unknown[];
 }
 
