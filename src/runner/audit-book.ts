@@ -34,8 +34,9 @@ export interface AuditedCell {
 export function auditBook(engine: Engine, bytes: Uint8Array): AuditedCell[] {
   const done = recalculate(engine, bytes);
   const said = new Map(done.notes.map((n) => [placeKey(n.sheet, n.cell), n]));
-  const before = wallCells(readWorkbook(bytes));
+  const before = wallCells(done.book);
   const after = done.bytes === bytes ? before : wallCells(readWorkbook(done.bytes));
+  const findingsOf = inputFindings(done.model);
   const stored = new Map(before.map((c) => [placeKey(c.sheet.name, c.cell.reference), c]));
   return after.map((wall) => {
     const { sheet, cell, box, functions } = wall;
@@ -56,7 +57,7 @@ export function auditBook(engine: Engine, bytes: Uint8Array): AuditedCell[] {
       functions,
       state,
       why: note?.text ?? (differing > 0 ? `${differing} of ${was!.length} stored values differ from what comes out` : ""),
-      inputs: isLeft ? [] : inputFindings(done.model, part.id, formula.text),
+      inputs: isLeft ? [] : findingsOf(part.id, formula.text),
       ...tableRemarks(blockValues(wall)),
     };
   });

@@ -4,7 +4,7 @@ import type { Engine, EngineModel } from "../engine/types";
 import { boxName, cellBox, cellPlace, type CellBox } from "../workbook/cell-reference";
 import { cellsOf, patchSheet, type CellEdit } from "../workbook/patch-sheet";
 import type { StoredValue } from "../workbook/read-sheet";
-import { readWorkbook } from "../workbook/read-workbook";
+import { readWorkbook, type Workbook } from "../workbook/read-workbook";
 import { writePackage } from "../workbook/write-package";
 import { bookModel, isSpilled, modelOf, type ModelFormula, type ModelSheet } from "./book-model";
 
@@ -23,7 +23,8 @@ export interface Recalculated {
   notes: RecalcNote[];
   /** Formula cells calculated, WALL cells among them, cells whose stored value changed. */
   counts: { formulas: number; wall: number; changed: number };
-  /** The calculated book in the engine, for further questions. */
+  /** The book as it was read, and the calculated one in the engine, for further questions. */
+  book: Workbook;
   model: EngineModel;
   sheets: readonly ModelSheet[];
 }
@@ -50,7 +51,7 @@ export function recalculate(engine: Engine, bytes: Uint8Array): Recalculated {
     touched = true;
     changed.set(part.sheet.part, new TextEncoder().encode(xml));
   }
-  return { bytes: touched ? writePackage({ ...book.package, parts: changed }) : bytes, notes, counts, model, sheets };
+  return { bytes: touched ? writePackage({ ...book.package, parts: changed }) : bytes, notes, counts, book, model, sheets };
 }
 
 /**
