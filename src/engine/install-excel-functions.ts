@@ -8,8 +8,11 @@
  * How it would break: `correct` throws for a name that has gone; changed argument orders are caught by the parity table.
  */
 import { installArrays } from "./excel-functions/arrays";
+import { installComplex } from "./excel-functions/complex";
 import { installCorrections } from "./excel-functions/corrections";
+import { installDistributions } from "./excel-functions/distributions";
 import { installElementary } from "./excel-functions/elementary";
+import { installEngineering } from "./excel-functions/engineering";
 import { installStatistics } from "./excel-functions/statistics";
 import { installTextAndKind } from "./excel-functions/text-and-kind";
 import type { EngineLibrary } from "./types";
@@ -17,6 +20,9 @@ import type { EngineLibrary } from "./types";
 export function installExcelFunctions(library: EngineLibrary): void {
   installElementary(library);
   installStatistics(library);
+  installDistributions(library);
+  installEngineering(library);
+  installComplex(library);
   installTextAndKind(library);
   installArrays(library);
   installCorrections(library);
