@@ -31,7 +31,7 @@ export function leftJudge(engine: Engine, from1904: boolean): (cell: StoredCell,
     if (formula.outside) return uses("a link to another book");
     const unknown = formula.functions.find((f) => !known.has(f));
     if (unknown !== undefined) return uses(`the function ${unknown.replace(/^_XLDUDF_/, "")}, unknown here`);
-    if (formula.missingName !== undefined) return uses(`the name ${formula.missingName}, which the book does not define`);
+    if (formula.missingName !== undefined) return uses(`the name ${formula.missingName}, which the book does not define, or only by itself`);
     const dated = from1904 ? formula.functions.find((f) => DATE_FUNCTIONS.has(f)) : undefined;
     if (dated !== undefined) return uses(`${dated}, and the book counts days from 1904`);
     const changing = formula.functions.find((f) => CHANGING.has(f));

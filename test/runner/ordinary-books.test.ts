@@ -118,7 +118,7 @@ describe("formulas the engine does not calculate", () => {
     ["SUM(H1:INDEX(H1:H9,3))", /a form not known here/],
     ["(", /a form not known here/],
     ["SUM(S:'Wall''s run 2'!A1)", /left for Excel/],
-    ["nosuch*2", /the name nosuch, which the book does not define/],
+    ["nosuch*2", /the name nosuch, which the book does not define, or only by itself/],
     ["'[2]Other'!A1", /a link to another book/],
     ["_xldudf_WALL_NOSUCH(1)", /the function WALL_NOSUCH, unknown here/],
     ["_xlfn.FUTURE.THING(H1)", /the function FUTURE\.THING, unknown here/],
@@ -154,6 +154,10 @@ describe("formulas and texts as files hold them", () => {
     ["H1%", "<v>0.03</v>"],
     ["[1]!WALL.EDGE_SPEED(0,H1)", "<v>3</v>"],
     ["wall.edge_speed(0,H1)", "<v>3</v>"],
+    ["_xll.wall.edge_speed(0,H1)", "<v>3</v>"],
+    ["Wall_Edge_Speed(0,H1)", "<v>3</v>"],
+    ["SUM(_xlfn.MAP(H1:H3,_xlfn.LAMBDA(_xlpm.x,_xlpm.x^2)))", "<v>50</v>"],
+    ["_xlfn.LET(_xlpm.h,H1,-_xlpm.h^2)", "<v>9</v>"],
     ["_XLDUDF_WALL_EDGE_SPEED(0,H1)", "<v>3</v>"],
     ["I1", "<v>=1+1</v>"],
     ["J1", "<v>1e5</v>"],
@@ -163,6 +167,40 @@ describe("formulas and texts as files hold them", () => {
   ])("%s", (formula, value) => {
     const texts = ["=1+1", "1e5", "TRUE"].map((text, i) => `<c r="${"IJK"[i]}1" t="inlineStr"><is><t>${text}</t></is></c>`).join("");
     expect(storedCell(recalculate(engine, byHand([formula], "", texts)).bytes, "A1")).toContain(value);
+  });
+});
+
+describe("names, as files hold them", () => {
+  const names = {
+    nu: "0.5",
+    pair: "{2,3}",
+    cp: "S!$H$1:$H$3",
+    twice: "2*nu",
+    square: "_xlfn.LAMBDA(_xlpm.x,_xlpm.x^2)",
+    Größe: "'Wall''s run 2'!$A$1",
+    gone: "#REF!",
+    below: "-nu",
+    words: '"a ""quoted"" text"',
+    growing: "OFFSET(S!$H$1,0,0,COUNT(S!$H:$H),1)",
+  };
+  const defined = `<definedNames>${Object.entries(names).map(([name, text]) => `<definedName name="${name}">${text.replace(/</g, "&lt;")}</definedName>`).join("")}<definedName name="nu" localSheetId="1">9</definedName></definedNames>`;
+
+  it.each([
+    ["nu*2", "<v>1</v>"],
+    ["SUM(pair)", "<v>5</v>"],
+    ["SUM(cp)/ROWS(cp)", "<v>4</v>"],
+    ["twice^2", "<v>1</v>"],
+    ["square(3)+square(-1)", "<v>10</v>"],
+    ["SUM(_xlfn.MAP(cp,square))", "<v>50</v>"],
+    ["größe*1", "<v>7</v>"],
+    ["'Wall''s run 2'!nu", "<v>9</v>"],
+    ["[0]!nu", "<v>0.5</v>"],
+    ["below^2", "<v>0.25</v>"],
+    ["gone", "<v>#REF!</v>"],
+    ["LEN(words)", "<v>15</v>"],
+    ["SUM(growing)", "<v>12</v>"],
+  ])("%s", (formula, value) => {
+    expect(storedCell(recalculate(engine, byHand([formula], defined)).bytes, "A1")).toContain(value);
   });
 });
 
