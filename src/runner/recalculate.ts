@@ -17,10 +17,20 @@ export interface RecalcNote {
   text: string;
 }
 
+/** A cell whose stored value is not the calculated one. */
+export interface Changed {
+  sheet: string;
+  cell: string;
+  stored: StoredValue;
+  value: StoredValue;
+}
+
 export interface Recalculated {
   /** The new file; the very bytes that came in where no value changed. */
   bytes: Uint8Array;
   notes: RecalcNote[];
+  /** Cells with another value than before, in the order in which they stand in the file. */
+  changes: Changed[];
   /** Formula cells calculated, WALL cells among them, cells whose stored value changed. */
   counts: { formulas: number; wall: number; changed: number };
 }
@@ -37,17 +47,22 @@ export function recalculate(engine: Engine, bytes: Uint8Array): Recalculated {
   const { model: first, sheets } = bookModel(engine, book);
   const model = settledModel(engine, first, sheets);
   const notes: RecalcNote[] = [];
+  const changes: Changed[] = [];
   const counts = { formulas: 0, wall: 0, changed: 0 };
   const changed = new Map(book.package.parts);
   let touched = false;
   for (const part of sheets) {
     const edits = editsOf(model, part, notes, counts);
+    for (const [cell, { value }] of edits) {
+      const stored = part.sheet.cells.get(cell)?.value ?? null;
+      if (!near(stored, value)) changes.push({ sheet: part.sheet.name, cell, stored, value });
+    }
     const xml = patchSheet(part.sheet, edits);
     if (xml === part.sheet.xml) continue;
     touched = true;
     changed.set(part.sheet.part, new TextEncoder().encode(xml));
   }
-  return { bytes: touched ? writePackage({ ...book.package, parts: changed }) : bytes, notes, counts };
+  return { bytes: touched ? writePackage({ ...book.package, parts: changed }) : bytes, notes, changes, counts };
 }
 
 /**
