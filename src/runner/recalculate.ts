@@ -4,15 +4,20 @@ import type { Engine, EngineModel } from "../engine/types";
 import { boxName, cellBox, cellPlace, type CellBox } from "../workbook/cell-reference";
 import { cellsOf, patchSheet, type CellEdit } from "../workbook/patch-sheet";
 import type { StoredValue } from "../workbook/read-sheet";
+import { asksRecalculation, withRecalculation } from "../workbook/recalculation-flag";
 import { readWorkbook } from "../workbook/read-workbook";
 import { writePackage } from "../workbook/write-package";
 import { bookModel, isSpilled, modelOf, type ModelFormula, type ModelSheet } from "./book-model";
+import { staleCells } from "./stale-cells";
 
 /** One thing a recalculation has to say about a cell. */
 export interface RecalcNote {
   sheet: string;
   cell: string;
-  /** "error": the cell shows an error; "left": it could not be calculated here; "kept": its value changes by itself. The stored value stays in the last two. */
+  /**
+   * "error": the cell shows an error; "left": it could not be calculated here, and what it reads has changed, or nobody vouched for
+   * its value; "kept": nothing it reads has changed, or its value changes by itself. The stored value stays in the last two.
+   */
   kind: "error" | "left" | "kept";
   text: string;
 }
@@ -48,6 +53,7 @@ export function recalculate(engine: Engine, bytes: Uint8Array): Recalculated {
   const model = settledModel(engine, first, sheets);
   const notes: RecalcNote[] = [];
   const changes: Changed[] = [];
+  const fresh: string[] = [];
   const counts = { formulas: 0, wall: 0, changed: 0 };
   const changed = new Map(book.package.parts);
   let touched = false;
@@ -55,14 +61,45 @@ export function recalculate(engine: Engine, bytes: Uint8Array): Recalculated {
     const edits = editsOf(model, part, notes, counts);
     for (const [cell, { value }] of edits) {
       const stored = part.sheet.cells.get(cell)?.value ?? null;
-      if (!near(stored, value)) changes.push({ sheet: part.sheet.name, cell, stored, value });
+      if (near(stored, value)) continue;
+      changes.push({ sheet: part.sheet.name, cell, stored, value });
+      fresh.push(`${part.id}!${cell}`);
     }
     const xml = patchSheet(part.sheet, edits);
     if (xml === part.sheet.xml) continue;
     touched = true;
     changed.set(part.sheet.part, new TextEncoder().encode(xml));
   }
-  return { bytes: touched ? writePackage({ ...book.package, parts: changed }) : bytes, notes, changes, counts };
+  notes.push(...leftNotes(book.xml, sheets, fresh));
+  if (notes.some((n) => n.kind === "left")) {
+    const xml = withRecalculation(book.xml);
+    if (xml !== book.xml) {
+      touched = true;
+      changed.set(book.part, new TextEncoder().encode(xml));
+    }
+  }
+  return { bytes: touched ? writePackage({ ...book.package, parts: changed }) : bytes, notes: inOrder(notes, sheets), changes, counts };
+}
+
+/** A note for each formula that was not calculated. */
+function leftNotes(workbookXml: string, sheets: readonly ModelSheet[], fresh: readonly string[]): RecalcNote[] {
+  const stale = staleCells(sheets, fresh);
+  const unsure = asksRecalculation(workbookXml);
+  return sheets.flatMap(({ sheet, id, formulas }) =>
+    [...formulas].flatMap(([cell, formula]): RecalcNote[] => {
+      if (formula.left === undefined) return [];
+      const { reason, byItself } = formula.left;
+      const kept = `stored value kept: ${reason}`;
+      const isLeft = !byItself && (unsure || formula.cell.value === null || stale.has(`${id}!${cell}`));
+      return [{ sheet: sheet.name, cell, ...(isLeft ? { kind: "left", text: `left for Excel, its ${kept}` } : { kind: "kept", text: byItself ? kept : `${kept}; nothing it reads has changed` }) }];
+    }),
+  );
+}
+
+/** Notes in the order in which their cells stand in the file. */
+function inOrder(notes: readonly RecalcNote[], sheets: readonly ModelSheet[]): RecalcNote[] {
+  const noteOf = new Map(notes.map((n) => [`${n.sheet}!${n.cell}`, n]));
+  return sheets.flatMap(({ sheet, formulas }) => [...formulas.keys()].flatMap((cell) => noteOf.get(`${sheet.name}!${cell}`) ?? []));
 }
 
 /**
@@ -109,11 +146,7 @@ function editsOf(model: EngineModel, part: ModelSheet, notes: RecalcNote[], coun
     edits.set(reference, ref === undefined ? { value } : { value, ref });
   };
   for (const [reference, formula] of formulas) {
-    if (formula.left !== undefined) {
-      const { reason, byItself } = formula.left;
-      notes.push({ sheet: sheet.name, cell: reference, kind: byItself ? "kept" : "left", text: byItself ? `stored value kept: ${reason}` : `left for Excel, its stored value kept: ${reason}` });
-      continue;
-    }
+    if (formula.left !== undefined) continue;
     counts.formulas++;
     if (formula.callsWall) counts.wall++;
     const shown = sheetValue(model.getters.getEvaluatedCell(positionOf(id, reference)));

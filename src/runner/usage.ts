@@ -21,8 +21,9 @@ wallsheet recalc --check [--tolerance SHARE] [--floor AMOUNT] IN.xlsx
 Recalculates the workbook and writes it with the new values. Only the values of formula cells change (and the blocks of spills that grow or
 shrink); styles, charts, names, comments and everything else stay byte for byte. Numbers that agree to 13 digits are left as they are.
 Error cells are reported with their sentence. Cells that cannot be calculated here keep their stored value and are reported with the reason: a
-function or name unknown here, a link to another book, a circle, a form of reference not known, dates counted from 1904. Cells whose value
-changes by itself (NOW, TODAY, RAND …) keep theirs too, so that a second run changes nothing.
+function or name unknown here, a link to another book, a circle, a form of reference not known, dates counted from 1904. Where something they
+read has changed they are "left for Excel", and the book is marked to be recalculated in full when it is opened. Cells whose value changes by
+itself (NOW, TODAY, RAND …) keep theirs too, so that a second run changes nothing.
 
   -o, --output FILE   where to write; the folder must exist
       --in-place      write over IN.xlsx
@@ -33,7 +34,7 @@ changes by itself (NOW, TODAY, RAND …) keep theirs too, so that a second run c
   -h, --help          this text
 
 The report goes to standard error, one line a cell; with --check the cells that differ go to standard output. Exit status: 0; 1 if a cell shows
-an error or could not be calculated, or with --check if a cell differs (what is not calculated here is reported and not compared); 2 if a file
+an error or is left for Excel, or with --check if a cell differs (what is not calculated here is reported and not compared); 2 if a file
 cannot be read or written. The output appears whole or not at all.`,
   eval: `wallsheet eval FORMULA
 

@@ -114,20 +114,25 @@ describe("recalc of a book by exceljs", () => {
 
 describe("formulas the engine does not calculate", () => {
   it.each([
-    ["SUM((H1,H2))", /a form not known here/],
-    ["SUM(H1:INDEX(H1:H9,3))", /a form not known here/],
-    ["(", /a form not known here/],
-    ["SUM(S:'Wall''s run 2'!A1)", /left for Excel/],
-    ["nosuch*2", /the name nosuch, which the book does not define, or only by itself/],
-    ["'[2]Other'!A1", /a link to another book/],
-    ["_xldudf_WALL_NOSUCH(1)", /the function WALL_NOSUCH, unknown here/],
-    ["_xlfn.FUTURE.THING(H1)", /the function FUTURE\.THING, unknown here/],
-    ["INDIRECT(\"'Wall''s run 2'!A1\")", /INDIRECT names something not found here/],
-    ["A1+1", /a circle of references/],
-  ])("%s keeps its stored value, and the cell that reads it uses that", (formula, reason) => {
+    ["kept", "SUM((H1,H2))", /a form not known here/],
+    ["left", "SUM(H1:INDEX(H1:H9,3))", /a form not known here/],
+    ["kept", "(", /a form not known here/],
+    ["left", "SUM(S:'Wall''s run 2'!A1)", /left for Excel/],
+    ["left", "nosuch*2", /the name nosuch, which the book does not define, or only by itself/],
+    ["kept", "'[2]Other'!A1", /a link to another book/],
+    ["kept", "_xldudf_WALL_NOSUCH(1)", /the function WALL_NOSUCH, unknown here/],
+    ["kept", "_xlfn.FUTURE.THING(H1)", /the function FUTURE\.THING, unknown here/],
+    ["left", "INDIRECT(\"'Wall''s run 2'!A1\")", /INDIRECT names something not found here/],
+    ["kept", "A1+1", /a circle of references/],
+    ["left", "_xlfn.FUTURE.THING(A2)", /the function FUTURE\.THING, unknown here/],
+    ["left", "_xlfn.FUTURE.THING(A1:A4)", /the function FUTURE\.THING, unknown here/],
+    ["left", "_xlfn.FUTURE.THING(A:A)", /the function FUTURE\.THING, unknown here/],
+    ["left", "_xlfn.FUTURE.THING($1:$2)", /the function FUTURE\.THING, unknown here/],
+    ["kept", "_xlfn.FUTURE.THING(B:B,'Wall''s run 2'!A1:A9)", /nothing it reads has changed/],
+  ])("%s: %s keeps its stored value, and the cell that reads it uses that", (kind, formula, reason) => {
     const { bytes, notes } = recalculate(engine, byHand([formula, "A1*2"]));
     expect(storedCell(bytes, "A1")).toContain("<v>5</v>");
-    expect(notes[0]).toMatchObject({ sheet: "S", cell: "A1", kind: "left", text: expect.stringMatching(reason) });
+    expect(notes[0]).toMatchObject({ sheet: "S", cell: "A1", kind, text: expect.stringMatching(reason) });
     if (formula !== "A1+1") expect(storedCell(bytes, "A2")).toContain("<v>10</v>");
   });
 
@@ -140,7 +145,26 @@ describe("formulas the engine does not calculate", () => {
   it("dates of a book that counts from 1904 are left, plain sums are not", () => {
     const { bytes, notes } = recalculate(engine, byHand(["YEAR(H1+40000)", "H1+H2"], '<workbookPr date1904="1"/>'));
     expect([storedCell(bytes, "A1"), storedCell(bytes, "A2")]).toEqual(['<c r="A1"><v>5</v></c>', '<c r="A2"><v>7</v></c>']);
-    expect(notes).toEqual([{ sheet: "S", cell: "A1", kind: "left", text: expect.stringContaining("counts days from 1904") }]);
+    expect(notes).toEqual([{ sheet: "S", cell: "A1", kind: "kept", text: expect.stringContaining("counts days from 1904") }]);
+  });
+
+  it("doubt is passed on through calculated cells, and the book asks to be recalculated", () => {
+    // A2 changes from 5 to 4; A1 hangs on it, A3 on A1, A4 on A3; A5 on nothing that changed.
+    const formulas = ["_xlfn.FUTURE.THING(A2)", "H2", "A1", "_xlfn.FUTURE.THING(A3)", "_xlfn.FUTURE.THING(H1)"];
+    const file = byHand(formulas);
+    const { bytes, notes } = recalculate(engine, file);
+    expect(notes.map((n) => [n.cell, n.kind])).toEqual([["A1", "left"], ["A4", "left"], ["A5", "kept"]]);
+    const workbook = (b: Uint8Array) => strFromU8(unzipSync(b)["xl/workbook.xml"]!);
+    expect(workbook(bytes)).toBe(workbook(file).replace("</sheets>", '</sheets><calcPr fullCalcOnLoad="1"/>'));
+    // The second run changes nothing, and does not take the flagged values for good ones.
+    const again = recalculate(engine, bytes);
+    expect(again.bytes).toBe(bytes);
+    expect(again.notes.map((n) => n.kind)).toEqual(["left", "left", "left"]);
+  });
+
+  it("a formula that has no stored value is left", () => {
+    const { notes } = recalculate(engine, withRows('<row r="1"><c r="A1"><f>_xlfn.FUTURE.THING(1)</f></c></row>'));
+    expect(notes.map((n) => n.kind)).toEqual(["left"]);
   });
 });
 
@@ -209,7 +233,7 @@ describe("array formulas that are left alone", () => {
 
   it.each(["_xlfn.FUTURE.THING(H1)", "SUM((H1,H2))"])("%s keeps its whole spilled block, which others go on reading", (formula) => {
     const { bytes, notes } = recalculate(engine, withRows(block(formula, "A1:A3")));
-    expect(notes.map((n) => n.kind)).toEqual(["left"]);
+    expect(notes.map((n) => n.kind)).toEqual(["kept"]);
     expect(strFromU8(unzipSync(bytes)[SHEET]!)).toBe(`<worksheet><sheetData>${block(formula, "A1:A3").replace("<v>0</v>", "<v>6</v>")}</sheetData></worksheet>`);
   });
 
@@ -218,7 +242,7 @@ describe("array formulas that are left alone", () => {
     expect(strFromU8(unzipSync(bytes)[SHEET]!)).toContain('<v>0</v></c></row><row r="2"><c r="A2"><v>10</v></c></row><row r="3"><c r="A3" t="e"><v>#N/A</v></c></row>');
   });
 
-  it("a what-if table keeps its values", () => {
+  it("a what-if table keeps its values; whatever changes in the book, it may have read", () => {
     const { notes } = recalculate(engine, withRows('<row r="1"><c r="A1"><f t="dataTable" ref="A1:A2" dt2D="0" r1="B1"/><v>9</v></c></row>'));
     expect(notes).toEqual([{ sheet: "S", cell: "A1", kind: "left", text: expect.stringContaining("a what-if table") }]);
   });
@@ -244,6 +268,6 @@ describe("files made to exhaust or to mislead", () => {
 
   it("formulas 10 000 brackets deep are left alone", () => {
     const deep = ["(".repeat(10_000) + "1" + ")".repeat(10_000), "-".repeat(10_000) + "1", "ABS(".repeat(10_000) + "1" + ")".repeat(10_000)];
-    expect(recalculate(engine, byHand(deep)).notes.map((n) => n.kind)).toEqual(["left", "left", "left"]);
+    expect(recalculate(engine, byHand(deep)).notes.map((n) => n.kind)).toEqual(["kept", "kept", "kept"]);
   }, within);
 });
