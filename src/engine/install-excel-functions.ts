@@ -9,10 +9,12 @@
  */
 import { installArrays } from "./excel-functions/arrays";
 import { installComplex } from "./excel-functions/complex";
+import { installConvert } from "./excel-functions/convert";
 import { installCorrections } from "./excel-functions/corrections";
 import { installDistributions } from "./excel-functions/distributions";
 import { installElementary } from "./excel-functions/elementary";
 import { installEngineering } from "./excel-functions/engineering";
+import { installFits } from "./excel-functions/fits";
 import { installStatistics } from "./excel-functions/statistics";
 import { installTextAndKind } from "./excel-functions/text-and-kind";
 import type { EngineLibrary } from "./types";
@@ -25,5 +27,7 @@ export function installExcelFunctions(library: EngineLibrary): void {
   installComplex(library);
   installTextAndKind(library);
   installArrays(library);
+  installConvert(library);
+  installFits(library);
   installCorrections(library);
 }

@@ -370,6 +370,64 @@ const ENGINEERING: readonly Row[] = [
   ['=IMSIN("4+3i")', "-7.61923172032141-6.548120040911i"],
 ];
 
+const FITS_AND_UNITS: readonly Row[] = [
+  // S, NumPy's lstsq and scipy.stats.linregress; the data are those of the examples in Microsoft's pages of LINEST and LOGEST.
+  ["=LINEST({1;9;5;7},{0;4;2;3})", [[2, 1]]],
+  ["=LINEST({1;4;9;16},{1;2;3;4}^{1,2})", [[1, 0, 0]]],
+  ["=IFERROR(LINEST({1,4,9,16.5},{1,2,3,4},FALSE,TRUE),\"-\")", [[3.4, 0], [0.5104464277037851, "-"], [0.9366644159351789, 2.7958302285129304], [44.36673773987208, 3], [346.8, 23.45]]],
+  [
+    "=IFERROR(LINEST({142000;144000;151000;150000;139000;169000;126000;142900;163000;169000;149000},{2310,2,2,20;2333,2,2,12;2356,3,1.5,33;2379,3,2,43;2402,2,3,53;2425,4,2,23;2448,2,1.5,99;2471,2,2,34;2494,3,3,23;2517,4,4,55;2540,2,3,22},TRUE,TRUE),\"-\")",
+    [
+      [-234.2371644712057, 2553.210660391558, 12529.768167086739, 27.641387366020016, 52317.83050729219],
+      [13.268011475500336, 530.6691519303698, 400.0668381939527, 5.429374041545038, 12237.361602861694],
+      [0.9967479933845101, 970.5784629285062, "-", "-", "-"],
+      [459.7536742253924, 6, "-", "-", "-"],
+      [1732393319.229251, 5652135.316203959, "-", "-", "-"],
+    ],
+  ],
+  ["=TAKE(LOGEST({33100;47300;69000;102000;150000;220000},{11;12;13;14;15;16},TRUE,TRUE),3)", [[1.4632756281161756, 495.3047701587278], [0.0026334028914247634, 0.03583428243571357], [0.9998086197758176, 0.01101631466507329]]],
+  ["=TREND({1;9;5;7},{0;4;2;3},{5;6})", [[11], [13]]],
+  ["=GROWTH({33100;47300;69000;102000;150000;220000},{11;12;13;14;15;16},{17;18})", [[320196.71836347], [468536.054184048]]],
+  // S, NumPy's polynomial fit about the middle: a cubic 1000 widths from zero, of which normal equations lose every digit.
+  ["=LET(x,SEQUENCE(11,1,1000),ROUND(INDEX(LINEST(0.001*(x-1005)^3+2*(x-1003)+SIN(x),x^{1,2,3}),1,1)*1E6,3))", -21211.027],
+  ["=LET(x,SEQUENCE(11,1,0,0.1),MAX(ABS(TREND(EXP(x),x^{1,2,3,4,5,6})-EXP(x)))<1E-7)", true],
+  // H: the second x is twice the first, so that one of them gets 0.
+  ["=LINEST({2;4;6},{1,2;2,4;3,6})", [[0, 2, 0]]],
+  ["=TREND({1;9;5;7})", [[3.4], [4.8], [6.2], [7.6]]], // y = 1.4 x + 2
+  ["=TREND({3,5,8},{1,2,3;1,4,9},{4;16})", 12], // (x² + x)/2 + 2
+  ["=LINEST({1,2},{1,2,3})", error("#REF!")],
+  ['=LINEST({1,2,"x"},{1,2,3})', error("#VALUE!")],
+  ["=LOGEST({1,-2,3},{1,2,3})", error("#NUM!")],
+  ["=MINVERSE({4,-1;2,0})", [[0, 0.5], [-1, 2]]],
+  ["=MINVERSE({1,2;2,4})", error("#NUM!")],
+  ["=FREQUENCY({79,85,78,85,50,81,95,88,97},{70,79,89})", [[1], [2], [4], [2]]],
+  ["=SUMPRODUCT({1,2,3},{1,\"a\",3})", 10],
+  ["=SUMPRODUCT({1,2},{1,2,3})", error("#VALUE!")],
+  ["=SUMPRODUCT({TRUE,TRUE},{1,2})", 0],
+  ["=SUMPRODUCT(({1,2,3}>1)*{1,2,3},{1,1,2})", 8],
+  // Exact definitions of the units, NIST SP 811 (2008), Appendix B; scipy.constants gives the same digits.
+  ['=CONVERT(1,"lbm","kg")', 0.45359237],
+  ['=CONVERT(1,"lbf","N")', 4.4482216152605],
+  ['=CONVERT(1,"psi","kPa")', 6.894757293168361],
+  ['=CONVERT(1,"HP","W")', 745.6998715822701],
+  ['=CONVERT(1,"BTU","J")', 1055.05585262],
+  ['=CONVERT(1,"kn","m/s")', 0.5144444444444445],
+  ['=CONVERT(1,"mph","km/hr")', 1.609344],
+  ['=CONVERT(1,"sg","kg")', 14.593902937206364],
+  ['=CONVERT(1,"gal","l")', 3.785411784],
+  ['=CONVERT(1,"ft^2","cm2")', 929.0304],
+  ['=CONVERT(1,"in3","mm^3")', 16387.064],
+  ['=CONVERT(1,"atm","mmHg")', 759.9998917256112],
+  ['=CONVERT(68,"F","C")', 20],
+  ['=CONVERT(-40,"C","F")', -40],
+  ['=CONVERT(459.67,"Rank","K")', 255.3722222222222],
+  ['=CONVERT(1,"kibyte","bit")', error("#N/A")],
+  ['=CONVERT(1,"Kibyte","bit")', 8192],
+  ['=CONVERT(2.5,"ft","sec")', error("#N/A")],
+  ['=CONVERT(1,"C","m")', error("#N/A")],
+  ['=CONVERT({1,2},"m","cm")', [[100, 200]]],
+];
+
 const ERRORS: readonly Row[] = [
   // H; codes as in Microsoft's pages of the functions, from memory.
   ["=SQRT(-1)", error("#NUM!")],
@@ -419,7 +477,7 @@ const TOLERANCE = 1e-12;
 
 describe("formulas give Excel's values", () => {
   const engine = preparedEngine();
-  const blocks = { PRECEDENCE, VALUES_AND_TEXT, CHOICES, ARRAYS, NAMED_STEPS, NUMBERS, STATISTICS, DISTRIBUTIONS, ENGINEERING, ERRORS };
+  const blocks = { PRECEDENCE, VALUES_AND_TEXT, CHOICES, ARRAYS, NAMED_STEPS, NUMBERS, STATISTICS, DISTRIBUTIONS, ENGINEERING, FITS_AND_UNITS, ERRORS };
 
   for (const [title, rows] of Object.entries(blocks)) {
     it.each(rows)(`${title.toLowerCase().replace(/_/g, " ")}: %s`, (formula, expected) => {
