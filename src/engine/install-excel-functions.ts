@@ -7,6 +7,7 @@
  * `range` being applied to each element of an array by the engine; a function's own argument order.
  * How it would break: `correct` throws for a name that has gone; changed argument orders are caught by the parity table.
  */
+import { installAggregate } from "./excel-functions/aggregate";
 import { installArrays } from "./excel-functions/arrays";
 import { installComplex } from "./excel-functions/complex";
 import { installConvert } from "./excel-functions/convert";
@@ -28,6 +29,7 @@ export function installExcelFunctions(library: EngineLibrary): void {
   installTextAndKind(library);
   installArrays(library);
   installConvert(library);
+  installAggregate(library);
   installFits(library);
   installCorrections(library);
 }

@@ -21,6 +21,11 @@ export function installStatistics(library: EngineLibrary): void {
   pooled("GEOMEAN", "Geometric mean.", 1, (x) => (x.some((v) => v <= 0) ? fail("GEOMEAN needs numbers above 0.") : Math.exp(mean(x.map(Math.log)))));
   pooled("HARMEAN", "Harmonic mean.", 1, (x) => (x.some((v) => v <= 0) ? fail("HARMEAN needs numbers above 0.") : 1 / mean(x.map((v) => 1 / v))));
   pooled("SKEW", "Skewness of a sample.", 3, (x) => asNumber(formulajs.SKEW(...x)));
+  pooled("SKEW.P", "Skewness of a whole population.", 3, (x) => {
+    const m = mean(x);
+    const spread = mean(x.map((v) => (v - m) ** 2));
+    return spread === 0 ? fail("SKEW.P needs numbers that differ.", "#DIV/0!") : mean(x.map((v) => (v - m) ** 3)) / spread ** 1.5;
+  });
   pooled("KURT", "Excess kurtosis of a sample.", 4, (x) => asNumber(formulajs.KURT(...x)));
   pooled("MODE.SNGL", "Most frequent number.", 1, mode);
   pooled("MODE", "Most frequent number.", 1, mode);
@@ -31,8 +36,9 @@ export function installStatistics(library: EngineLibrary): void {
     return best + (equal - 1) / 2;
   });
   for (const name of ["PERCENTRANK", "PERCENTRANK.INC"]) {
-    addMissing(library, name, "Share of a list below a number, ends included.", ["list (any, range)", "number (number)", "digits (number, optional)"], (list, x, digits) => percentRank(numbersOf([list]), numberOf(x), numberOf(digits, 3)));
+    addMissing(library, name, "Share of a list below a number, ends included.", ["list (any, range)", "number (number)", "digits (number, optional)"], (list, x, digits) => percentRank(numbersOf([list]), numberOf(x), numberOf(digits, 3), 0));
   }
+  addMissing(library, "PERCENTRANK.EXC", "Share of a list below a number, ends excluded.", ["list (any, range)", "number (number)", "digits (number, optional)"], (list, x, digits) => percentRank(numbersOf([list]), numberOf(x), numberOf(digits, 3), 1));
 
   numbers(["STANDARDIZE"], "Distance from the mean in standard deviations.", "x mean standard_deviation", (x, m, s) => (x - m) / positive("STANDARDIZE", s));
   numbers(["NORM.DIST", "NORMDIST"], "Normal distribution.", "x mean standard_deviation cumulative", (x, m, s, cumulative) => {
@@ -87,12 +93,12 @@ function rank(x: EngineArgument, list: EngineArgument, order: EngineArgument): {
   return { best: 1 + numbers.filter((v) => (ascending ? v < value : v > value)).length, equal };
 }
 
-function percentRank(list: number[], x: number, digits: number): number {
+function percentRank(list: number[], x: number, digits: number, outside: 0 | 1): number {
   const sorted = list.sort((a, b) => a - b);
   if (sorted.length === 0 || x < sorted[0]! || x > sorted.at(-1)!) fail("The number lies outside the list.", "#N/A");
   const below = sorted.filter((v) => v < x).length;
   const between = sorted[below] === x ? 0 : (x - sorted[below - 1]!) / (sorted[below]! - sorted[below - 1]!) - 1;
-  const share = sorted.length === 1 ? 1 : (below + between) / (sorted.length - 1);
+  const share = sorted.length === 1 && outside === 0 ? 1 : (below + between + outside) / (sorted.length - 1 + 2 * outside);
   return Math.floor(Number((share * 10 ** digits).toPrecision(15))) / 10 ** digits;
 }
 
