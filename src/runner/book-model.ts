@@ -40,11 +40,13 @@ const MOST_COLUMNS = 4_000;
 /** The engine's format code for cells whose content is text whatever it looks like. */
 const TEXT_FORMAT = 1;
 
+const HIDDEN_ROW = /<(?:[\w.-]+:)?row\s(?:"[^"]*"|'[^']*'|[^<>"'])*?(?<=\s)hidden\s*=\s*["'](?:1|true)["']/;
+
 /** Puts a workbook's constants and formulas into the sheet engine. */
 export function bookModel(engine: Engine, book: Workbook): BookModel {
   const alias = sheetAliases(book.sheets.map((s) => s.name));
   const read = formulaReader(book, alias);
-  const whyLeft = leftJudge(engine, book.from1904);
+  const whyLeft = leftJudge(engine, { from1904: book.from1904, hidesRows: book.sheets.some((s) => HIDDEN_ROW.test(s.xml)) });
 
   const sheets = book.sheets.map((sheet): ModelSheet => {
     const formulas = new Map<string, ModelFormula>();

@@ -1,3 +1,4 @@
+import { UNKNOWN_FORMAT } from "../engine/excel-functions/corrections";
 import { sheetValue, storedErrorCode } from "../engine/engine-values";
 import { SheetError } from "../engine/sheet-function";
 import type { Engine, EngineModel } from "../engine/types";
@@ -117,13 +118,16 @@ function settledModel(engine: Engine, model: EngineModel, sheets: readonly Model
         formula.left = { reason: "its formula is in a form not known here", byItself: false };
         unread = true;
       }
-      const { value } = model.getters.getEvaluatedCell(position);
+      const { value, message } = model.getters.getEvaluatedCell(position);
       if (value === CIRCLE) {
         formula.left = { reason: "it stands in a circle of references, or hangs on one", byItself: false };
         unread = true;
       } else if (value === LOST && /(?<![\w.])INDIRECT\(/i.test(formula.text)) {
         // The engine knows the book's names and some of its sheets by other words.
         formula.left = { reason: "INDIRECT names something not found here", byItself: false };
+        unread = true;
+      } else if (message?.startsWith(UNKNOWN_FORMAT) && /(?<![\w.])TEXT\(/i.test(formula.text)) {
+        formula.left = { reason: message.replace(/\.$/, ""), byItself: false };
         unread = true;
       }
       if (formula.cell.formula?.kind === "array") continue;

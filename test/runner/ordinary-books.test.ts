@@ -162,6 +162,22 @@ describe("formulas the engine does not calculate", () => {
     expect(again.notes.map((n) => n.kind)).toEqual(["left", "left", "left"]);
   });
 
+  it("SUBTOTAL and AGGREGATE are left in a book with hidden or filtered rows, and calculated in others", () => {
+    const rows = (hidden: string) => `<row r="1"><c r="A1"><v>1</v></c><c r="B1"><f>SUBTOTAL(9,A1:A4)</f><v>1</v></c><c r="C1"><f>AGGREGATE(9,3,A1:A4)</f><v>1</v></c></row><row r="2"${hidden}><c r="A2"><v>2</v></c></row><row r="3"><c r="A3"><f>SUBTOTAL(9,A1:A2)</f><v>1</v></c></row><row r="4"><c r="A4"><v>4</v></c></row>`;
+    const values = (file: Uint8Array) => ["B1", "C1"].map((cell) => /<v>(.*)<\/v>/.exec(storedCell(file, cell))![1]);
+    const shown = recalculate(engine, withRows(rows("")));
+    expect([values(shown.bytes), shown.notes]).toEqual([["7", "7"], []]); // the inner subtotal is not counted twice
+    const hidden = recalculate(engine, withRows(rows(' ht="15" hidden="1"')));
+    expect(values(hidden.bytes)).toEqual(["1", "1"]);
+    expect(hidden.notes.map((n) => n.text)).toEqual(expect.arrayContaining([expect.stringContaining("SUBTOTAL, which may skip hidden rows")]));
+  });
+
+  it("a TEXT whose format is not known here is left, a cell that joins it is not", () => {
+    const { bytes, notes } = recalculate(engine, byHand(['TEXT(H1,"# ?/?")', 'A1&"!"', 'TEXT("abc","0.0")', 'TEXT(H1,"0.0")', 'TEXT("1.25","0.0")']));
+    expect(["A1", "A2", "A3", "A4", "A5"].map((cell) => /<v>(.*)<\/v>/.exec(storedCell(bytes, cell))![1])).toEqual(["5", "5!", "abc", "3.0", "1.3"]);
+    expect(notes).toEqual([{ sheet: "S", cell: "A1", kind: "kept", text: 'stored value kept: TEXT\'s format "# ?/?" is not known here; nothing it reads has changed' }]);
+  });
+
   it("a formula that has no stored value is left", () => {
     const { notes } = recalculate(engine, withRows('<row r="1"><c r="A1"><f>_xlfn.FUTURE.THING(1)</f></c></row>'));
     expect(notes.map((n) => n.kind)).toEqual(["left"]);

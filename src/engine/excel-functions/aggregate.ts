@@ -42,5 +42,6 @@ function cells(argument: EngineArgument): EngineValue[] {
 }
 
 function isSubtotal(context: EngineContext, { position }: EngineValue): boolean {
-  return position !== undefined && NESTED.test(context.getters.getCell(position)?.content ?? "");
+  const formula = position && context.getters.getCell(position)?.compiledFormula;
+  return formula !== undefined && NESTED.test(formula.toFormulaString(context.getters));
 }
