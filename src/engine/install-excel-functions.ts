@@ -16,6 +16,7 @@ import { installDistributions } from "./excel-functions/distributions";
 import { installElementary } from "./excel-functions/elementary";
 import { installEngineering } from "./excel-functions/engineering";
 import { installFits } from "./excel-functions/fits";
+import { installOldDates } from "./excel-functions/old-dates";
 import { installStatistics } from "./excel-functions/statistics";
 import { installTextAndKind } from "./excel-functions/text-and-kind";
 import type { EngineLibrary } from "./types";
@@ -31,5 +32,6 @@ export function installExcelFunctions(library: EngineLibrary): void {
   installConvert(library);
   installAggregate(library);
   installFits(library);
+  installOldDates(library);
   installCorrections(library);
 }

@@ -46,6 +46,8 @@ const SAME_NUMBER = 1e-13;
 /** The engine's value of a cell that refers to itself; what other programs make of it hangs on their settings. */
 const CIRCLE = "#CYCLE";
 const LOST = "#REF";
+/** What the engine says of an INDIRECT in R1C1 notation. */
+const NO_R1C1 = "R1C1 notation is not supported.";
 
 /** Recalculates a workbook's formulas and puts the changed values into the original package; every other byte of its parts stays. */
 export function recalculate(engine: Engine, bytes: Uint8Array): Recalculated {
@@ -122,7 +124,7 @@ function settledModel(engine: Engine, model: EngineModel, sheets: readonly Model
       if (value === CIRCLE) {
         formula.left = { reason: "it stands in a circle of references, or hangs on one", byItself: false };
         unread = true;
-      } else if (value === LOST && /(?<![\w.])INDIRECT\(/i.test(formula.text)) {
+      } else if ((value === LOST || message === NO_R1C1) && /(?<![\w.])INDIRECT\(/i.test(formula.text)) {
         // The engine knows the book's names and some of its sheets by other words.
         formula.left = { reason: "INDIRECT names something not found here", byItself: false };
         unread = true;

@@ -1,3 +1,4 @@
+import { NOT_COMPUTED } from "../engine/not-computed";
 import type { Engine } from "../engine/types";
 import { boxSize, cellBox } from "../workbook/cell-reference";
 import type { StoredCell } from "../workbook/read-sheet";
@@ -31,6 +32,8 @@ export function leftJudge(engine: Engine, { from1904, hidesRows }: { from1904: b
     const block = cell.formula?.kind === "array" && cell.attributes["cm"] === undefined && cell.formula.ref !== undefined ? boxSize(cellBox(cell.formula.ref)) : 0;
     if (block > LARGEST_BLOCK) return { reason: `its fixed block has ${block} cells, more than ${LARGEST_BLOCK}`, byItself: false };
     if (formula.outside) return uses("a link to another book");
+    const named = formula.functions.find((f) => Object.hasOwn(NOT_COMPUTED, f));
+    if (named !== undefined) return uses(`${named}, which ${NOT_COMPUTED[named]}`);
     const unknown = formula.functions.find((f) => !known.has(f));
     if (unknown !== undefined) return uses(`the function ${unknown.replace(/^_XLDUDF_/, "")}, unknown here`);
     if (formula.missingName !== undefined) return uses(`the name ${formula.missingName}, which the book does not define, or only by itself`);

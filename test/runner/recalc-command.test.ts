@@ -19,7 +19,7 @@ describe("wallsheet recalc", () => {
     const { status, out, complaints } = recalcCommand([at("in.xlsx"), "-o", at("out.xlsx")]);
     expect([status, out]).toEqual([1, ""]);
     expect(complaints).toEqual([
-      "Wing!M9: left for Excel, its stored value kept: it uses the function CUBEVALUE, unknown here",
+      "Wing!M9: left for Excel, its stored value kept: it uses CUBEVALUE, which reads a data model",
       "Wing!M10: #VALUE! EDGE_SPEED needs cp of at most 1; row 1 has 2",
       expect.stringMatching(/in\.xlsx: 30 formulas calculated, 6 with WALL functions; \d+ cells changed$/),
     ]);
