@@ -15,6 +15,7 @@ import { installCorrections } from "./excel-functions/corrections";
 import { installDistributions } from "./excel-functions/distributions";
 import { installElementary } from "./excel-functions/elementary";
 import { installEngineering } from "./excel-functions/engineering";
+import { installFixedBlock } from "./excel-functions/fixed-block";
 import { installFits } from "./excel-functions/fits";
 import { installOldDates } from "./excel-functions/old-dates";
 import { installStatistics } from "./excel-functions/statistics";
@@ -33,5 +34,6 @@ export function installExcelFunctions(library: EngineLibrary): void {
   installAggregate(library);
   installFits(library);
   installOldDates(library);
+  installFixedBlock(library);
   installCorrections(library);
 }

@@ -169,10 +169,8 @@ function editsOf(model: EngineModel, part: ModelSheet, notes: RecalcNote[], coun
     for (const name of cellsOf(box)) {
       if (name === reference) continue;
       alive.add(name);
-      const { row, column } = cellPlace(name);
-      const inside = zone && column - 1 <= zone.right && row - 1 <= zone.bottom;
-      // A fixed block larger than the result shows #N/A around it, as array formulas of the old kind do.
-      put(name, inside ? (valueAt(model, id, name) ?? 0) : { error: "#N/A" });
+      // A fixed block that could not be filled shows its error everywhere.
+      put(name, zone ? (valueAt(model, id, name) ?? 0) : value);
     }
   }
   for (const name of spilled.keys()) if (isSpilled(part, name) && !alive.has(name) && !edits.has(name)) put(name, null);

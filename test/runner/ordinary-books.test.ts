@@ -261,6 +261,36 @@ describe("array formulas that are left alone", () => {
     expect(strFromU8(unzipSync(bytes)[SHEET]!)).toContain('<v>0</v></c></row><row r="2"><c r="A2"><v>10</v></c></row><row r="3"><c r="A3" t="e"><v>#N/A</v></c></row>');
   });
 
+  it.each([
+    ["a column is repeated beside itself", "{1;2}", "A1:B2", "1 1 2 2"],
+    ["a row is repeated below itself", "{1,2}", "A1:B2", "1 2 1 2"],
+    ["a single value fills the block", "SUM(D1:D2)", "A1:B2", "7 7 7 7"],
+    ["a larger result is cut", "D1:D2*{1,2,3}", "A1:B1", "3 6"],
+    ["a block of one cell shows the first value", "D1:D2*2", "A1", "6"],
+    ["an error fills the block", "1/0+SUM(D1:D2)", "A1:A2", "#DIV/0! #DIV/0!"],
+  ])("an array formula of the old kind: %s", (_what, formula, ref, values) => {
+    const cell = (at: string, inside = "<v>0</v>") => `<c r="${at}">${inside}</c>`;
+    const block = `<f t="array" ref="${ref}">${formula}</f><v>0</v>`;
+    const count = `<f>SUM(IF(ISNUMBER(A1:B2),A1:B2,0))</f><v>0</v>`;
+    const inBlock = (at: string) => (ref === "A1" || (ref === "A1:B1" && at.endsWith("2")) || (ref === "A1:A2" && at.startsWith("B")) ? "" : cell(at));
+    const { bytes } = recalculate(engine, withRows(`<row r="1">${cell("A1", block)}${inBlock("B1")}${cell("D1", "<v>3</v>")}${cell("E1", `<f t="array" ref="E1">${count.replace(/<f>(.*)<\/f>.*/, "$1")}</f><v>0</v>`)}</row><row r="2">${inBlock("A2")}${inBlock("B2")}${cell("D2", "<v>4</v>")}</row>`));
+    const xml = strFromU8(unzipSync(bytes)[SHEET]!);
+    const shown = [...xml.matchAll(/<c r="([AB])[12]"[^>]*>(?:<f.*?<\/f>)?<v>(.*?)<\/v>/g)].map((m) => m[2]!);
+    expect(shown.join(" ")).toBe(values);
+    // Who reads the block sees what it shows, and nothing beside it.
+    const sum = shown.reduce((s, v) => s + (Number(v) || 0), 0);
+    expect(storedCell(bytes, "E1")).toContain(`<v>${sum}</v>`);
+  });
+
+  it("shared formulas follow their cells, with names, sheets and strings in them", () => {
+    const cell = (at: string, inside: string) => `<c r="${at}">${inside}</c>`;
+    const follower = '<f t="shared" si="0"/><v>0</v>';
+    const rows = [2, 3, 4].map((a, i) => `<row r="${i + 1}">${cell(`A${i + 1}`, `<v>${a}</v>`)}${cell(`B${i + 1}`, i === 0 ? '<f t="shared" ref="B1:B3" si="0">-A1^2+$A$1+S!A1+SUM(A$1:A1)+LEN("A1")</f><v>0</v>' : follower)}</row>`);
+    const { bytes } = recalculate(engine, withRows(rows.join("")));
+    // 4+2+2+2+2, 9+2+3+5+2, 16+2+4+9+2
+    expect(["B1", "B2", "B3"].map((at) => /<v>(.*)<\/v>/.exec(storedCell(bytes, at))![1])).toEqual(["12", "21", "33"]);
+  });
+
   it("a what-if table keeps its values; whatever changes in the book, it may have read", () => {
     const { notes } = recalculate(engine, withRows('<row r="1"><c r="A1"><f t="dataTable" ref="A1:A2" dt2D="0" r1="B1"/><v>9</v></c></row>'));
     expect(notes).toEqual([{ sheet: "S", cell: "A1", kind: "left", text: expect.stringContaining("a what-if table") }]);
