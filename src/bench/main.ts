@@ -1,4 +1,4 @@
-import { version } from "../../package.json";
+import project from "../../package.json";
 import { CAUTIONS } from "../cells/cautions";
 import { catalogue } from "../cells/generated/catalogue";
 import { tableRemarks } from "../cells/reading/table-remarks";
@@ -127,7 +127,7 @@ async function start(): Promise<void> {
     try {
       const copy = plainCopy(readWorkbook(await writeBook(model)), {
         methods: catalogue,
-        version,
+        version: project.version,
         date: today(),
         cautions: CAUTIONS,
         remarks: (_cell, values) => {

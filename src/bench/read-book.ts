@@ -1,10 +1,11 @@
 import { strFromU8 } from "fflate";
 import { catalogue } from "../cells/generated/catalogue";
+import { cellFormulas } from "../workbook/cell-formulas";
 import { cellBox, cellPlace } from "../workbook/cell-reference";
-import { cellsOf } from "../workbook/patch-sheet";
-import { formulaReader, sharedFormulaAt } from "../workbook/plain-formula";
+import { cellsInside } from "../workbook/cells-inside";
+import { formulaReader } from "../workbook/plain-formula";
 import { readWorkbook, type BookSheet, type Workbook } from "../workbook/read-workbook";
-import type { StoredCell, StoredValue } from "../workbook/read-sheet";
+import type { StoredValue } from "../workbook/read-sheet";
 import { shownSpelling } from "../workbook/stored-spelling";
 import { typedContent } from "./block-writer";
 import type { GridLibrary } from "./grid-library";
@@ -70,27 +71,18 @@ export function readBook(library: GridLibrary, bytes: Uint8Array): ReadBook {
 /** Contents of the cells as typed: formulas as shown, values kept from being read as something else; cells of a spill are left to it. */
 function sheetCells(sheet: BookSheet, shown: (text: string, at: string) => string): Record<string, string> {
   const out: Record<string, string> = {};
-  const shared = new Map<string, StoredCell>();
+  const formulas = cellFormulas(sheet.cells);
   const spilled = new Set<string>();
-  for (const cell of sheet.cells.values()) {
-    const { formula } = cell;
-    if (formula?.kind === "shared" && formula.text !== "") shared.set(formula.shared ?? "", cell);
-    if (formula?.kind === "array" && formula.ref !== undefined) for (const reference of cellsOf(cellBox(formula.ref))) if (reference !== cell.reference) spilled.add(reference);
+  for (const { reference, formula } of sheet.cells.values()) {
+    if (formula?.kind !== "array" || formula.ref === undefined) continue;
+    for (const inside of cellsInside(cellBox(formula.ref), sheet.cells)) if (inside !== reference) spilled.add(inside);
   }
-  for (const cell of sheet.cells.values()) {
-    const text = formulaText(cell, shared);
-    if (text !== undefined) out[cell.reference] = shown(text, cell.reference);
-    else if (!spilled.has(cell.reference) && cell.value !== null && cell.value !== "") out[cell.reference] = constant(cell.value);
+  for (const { reference, value } of sheet.cells.values()) {
+    const text = formulas.get(reference);
+    if (text !== undefined) out[reference] = shown(text, reference);
+    else if (!spilled.has(reference) && value !== null && value !== "") out[reference] = constant(value);
   }
   return out;
-}
-
-function formulaText(cell: StoredCell, shared: ReadonlyMap<string, StoredCell>): string | undefined {
-  const { formula } = cell;
-  if (!formula || formula.kind === "dataTable") return undefined;
-  if (formula.kind !== "shared" || formula.text !== "") return formula.text === "" ? undefined : formula.text;
-  const master = shared.get(formula.shared ?? "");
-  return master?.formula && sharedFormulaAt(master.formula.text, master.reference, cell.reference);
 }
 
 function constant(value: Exclude<StoredValue, null>): string {

@@ -1,3 +1,4 @@
+import { FIXED_BLOCK } from "../engine/excel-functions/fixed-block";
 import type { Engine, EngineModel } from "../engine/types";
 import { cellFormulas } from "../workbook/cell-formulas";
 import { cellBox, cellPlace, columnLetters } from "../workbook/cell-reference";
@@ -41,11 +42,13 @@ const MOST_COLUMNS = 4_000;
 /** The engine's format code for cells whose content is text whatever it looks like. */
 const TEXT_FORMAT = 1;
 
+const HIDDEN_ROW = /<(?:[\w.-]+:)?row\s(?:"[^"]*"|'[^']*'|[^<>"'])*?(?<=\s)hidden\s*=\s*["'](?:1|true)["']/;
+
 /** Puts a workbook's constants and formulas into the sheet engine. */
 export function bookModel(engine: Engine, book: Workbook): BookModel {
   const alias = sheetAliases(book.sheets.map((s) => s.name));
   const read = formulaReader(book, alias);
-  const whyLeft = leftJudge(engine, book.from1904);
+  const whyLeft = leftJudge(engine, { from1904: book.from1904, hidesRows: book.sheets.some((s) => HIDDEN_ROW.test(s.xml)) });
 
   const sheets = book.sheets.map((sheet): ModelSheet => {
     const formulas = new Map<string, ModelFormula>();
@@ -57,7 +60,7 @@ export function bookModel(engine: Engine, book: Workbook): BookModel {
       if (text === undefined) continue;
       const plain = read(text, sheet.name, cellPlace(cell.reference));
       const left = whyLeft(cell, plain);
-      formulas.set(cell.reference, { cell, text: plain.text, callsWall: callsWall(plain), ...(left === undefined ? {} : { left }) });
+      formulas.set(cell.reference, { cell, text: left ? plain.text : blockText(cell, plain.text), callsWall: callsWall(plain), ...(left === undefined ? {} : { left }) });
     }
     for (const { cell } of formulas.values()) {
       if (cell.formula?.kind !== "array" || cell.formula.ref === undefined) continue;
@@ -115,6 +118,13 @@ function gridSize(sheet: string, used: Record<string, string>, stored: ReadonlyM
     throw new WorkbookError(`The sheet ${sheet} is used as far as row ${rows} and column ${columnLetters(columns)}; sheets of more than ${MOST_ROWS} rows or ${MOST_COLUMNS} columns are not calculated here.`);
   }
   return { rowNumber: lowestArray + rows + SPARE_ROWS, colNumber: columns + SPARE_COLUMNS };
+}
+
+/** An array formula of the old kind is told its block. */
+function blockText(cell: StoredCell, text: string): string {
+  if (cell.formula?.kind !== "array" || cell.attributes["cm"] !== undefined) return text;
+  const { left, right, top, bottom } = cellBox(cell.formula.ref ?? cell.reference);
+  return `=${FIXED_BLOCK}(${text.replace(/^\s*=/, "")},${bottom - top + 1},${right - left + 1})`;
 }
 
 function constantText(value: StoredValue): string | undefined {

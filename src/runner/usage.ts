@@ -7,6 +7,7 @@ usage: wallsheet COMMAND [ARGUMENTS] [--help]
   recalc IN.xlsx -o OUT.xlsx   recalculate a workbook: WALL cells, what they read and what reads them
   freeze BOOK.xlsx [-o OUT]    a plain copy: values in place of WALL cells, and a sheet of method notes
   audit BOOK.xlsx              look at every WALL cell: state, inputs, valid range, notes
+  recalc --check IN.xlsx       compare the stored values with the calculated ones; exit status 1 where they differ
   eval FORMULA                 calculate one formula and print it
   list [NAME]                  list the functions, or show one with its limits and sources
 
@@ -17,20 +18,26 @@ exit status: 0 all well; 1 something could not be calculated, or audit found som
 
 Results are preliminary-design estimates: check them against test or a higher-order method.`,
   recalc: `wallsheet recalc IN.xlsx -o OUT.xlsx
+wallsheet recalc --check [--tolerance SHARE] [--floor AMOUNT] IN.xlsx
 
 Recalculates the workbook and writes it with the new values. Only the values of formula cells change (and the blocks of spills that grow or
 shrink); styles, charts, names, comments and everything else stay byte for byte. Numbers that agree to 13 digits are left as they are.
 Error cells are reported with their sentence. Cells that cannot be calculated here keep their stored value and are reported with the reason: a
-function or name unknown here, a link to another book, a circle, a form of reference not known, dates counted from 1904. Cells whose value
-changes by itself (NOW, TODAY, RAND …) keep theirs too, so that a second run changes nothing.
+function or name unknown here, a link to another book, a circle, a form of reference not known, dates counted from 1904. Where something they
+read has changed they are "left for Excel", and the book is marked to be recalculated in full when it is opened. Cells whose value changes by
+itself (NOW, TODAY, RAND …) keep theirs too, so that a second run changes nothing.
 
   -o, --output FILE   where to write; the folder must exist
       --in-place      write over IN.xlsx
-  -q, --quiet         report nothing but failures to read or write
+      --check         write no book, but compare the stored values with the calculated ones: a test that a book still gives what it gave
+      --tolerance SHARE   two numbers are alike within this share of the larger one (1e-9 unless given)
+      --floor AMOUNT      and within this amount, in the cell's own unit (0 unless given)
+  -q, --quiet         report nothing but failures to read or write, and differing cells
   -h, --help          this text
 
-The report goes to standard error, one line a cell. Exit status: 0; 1 if a cell shows an error or could not be calculated; 2 if a file cannot be
-read or written. The output appears whole or not at all.`,
+The report goes to standard error, one line a cell; with --check the cells that differ go to standard output. Exit status: 0; 1 if a cell shows
+an error or is left for Excel, or with --check if a cell differs (what is not calculated here is reported and not compared); 2 if a file
+cannot be read or written. The output appears whole or not at all.`,
   freeze: `wallsheet freeze BOOK.xlsx [-o OUT.xlsx] [--date YYYY-MM-DD]
 
 Writes a copy for someone without Wallsheet. The book is recalculated first as by recalc; then every cell that calls a WALL function, and the block

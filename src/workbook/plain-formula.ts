@@ -2,8 +2,8 @@ import { isRange, parseStructRef, tokenize, tokenTypes, translateFormulaToA1, tr
 import { boxName, cellBox, cellName, type CellBox, type CellPlace } from "./cell-reference";
 import type { BookTable, Workbook } from "./read-workbook";
 
-/** Names may refer to names; deeper than this they go in circles. */
-const DEEPEST_NAME = 20;
+/** Names may refer to names; a formula that needs more of them than this was made to exhaust the reader. */
+const MOST_NAMES = 1_000;
 
 /** A formula as a sheet would show it, names and table references replaced by what they stand for. */
 export interface PlainFormula {
@@ -12,7 +12,7 @@ export interface PlainFormula {
   functions: string[];
   /** It refers to another book, whose values are not here. */
   outside: boolean;
-  /** A name it uses that the book does not define. */
+  /** A name it uses that the book does not define, or defines by itself. */
   missingName?: string;
 }
 
@@ -20,25 +20,37 @@ export interface PlainFormula {
 export function formulaReader(book: Pick<Workbook, "names" | "tables">, sheetAlias: (name: string) => string = (name) => name) {
   const names = new Map(book.names.map((n) => [`${n.sheet?.toUpperCase() ?? ""}!${n.name.toUpperCase()}`, n.text.replace(/^=/, "")]));
   const tables = new Map(book.tables.map((t) => [t.name.toUpperCase(), t]));
+  let namesRead = 0;
 
-  function read(text: string, sheet: string, at: CellPlace, depth: number): PlainFormula {
-    const tokens = tokenize(withoutBrokenBook(text), { withLocation: false });
+  function read(text: string, sheet: string, at: CellPlace, chain: readonly string[]): PlainFormula {
+    const tokens = tokenize(withoutBrokenBook(text), { withLocation: false }).map(ownSpelling);
     const local = new Set(tokens.filter((t) => /^_xlpm\./i.test(t.value)).map((t) => t.value.slice(6).toUpperCase()));
     const functions: string[] = [];
     let outside = false;
     let missingName: string | undefined;
     // Writers that leave out `_xlpm.` give parameters plain names.
     const hasParameters = tokens.some((t) => t.type === tokenTypes.FUNCTION && /^(?:LET|LAMBDA)$/.test(bareFunction(t.value)));
-    const parts = tokens.map((token): string => {
+    const parts = tokens.map((token, i): string => {
       switch (token.type) {
-        case tokenTypes.FUNCTION:
-          functions.push(bareFunction(token.value));
-          return token.value;
+        case tokenTypes.FUNCTION: {
+          // A name that holds a LAMBDA is called like a function; any other name gives way to the function of that name.
+          const found = named(token.value, sheet, at, chain, local);
+          const called = found?.functions.includes("LAMBDA") || found?.missingName === token.value ? found : undefined;
+          if (called === undefined) functions.push(bareFunction(token.value));
+          else {
+            functions.push(...called.functions);
+            outside ||= called.outside;
+            missingName ??= called.missingName;
+          }
+          return called?.text ?? token.value;
+        }
         case tokenTypes.REF_STRUCT:
           return structured(token.value, sheet, at);
         case tokenTypes.REF_NAMED: {
-          const inlined = named(token.value, sheet, at, depth, local);
+          const inlined = named(token.value, sheet, at, chain, local);
           if (inlined === undefined) {
+            const table = local.has(token.value.toUpperCase()) ? undefined : tables.get(token.value.toUpperCase());
+            if (table) return structured(`${table.name}[]`, sheet, at);
             if (!hasParameters && !/^_xl(?:pm|eta)\./i.test(token.value)) missingName ??= token.value;
             return token.value;
           }
@@ -48,7 +60,10 @@ export function formulaReader(book: Pick<Workbook, "names" | "tables">, sheetAli
           return inlined.text;
         }
         default:
+          if (token.value === "!" && tokens[i - 1]?.value === "]") outside = true;
           if (!isRange(token)) return token.value;
+          // `#REF!A1`: a cell of a sheet that is gone.
+          if (tokens[i - 1]?.value === "#REF!") return "";
           if (/^'?\[/.test(token.value)) outside = true;
           return aliased(token);
       }
@@ -56,17 +71,17 @@ export function formulaReader(book: Pick<Workbook, "names" | "tables">, sheetAli
     return { text: parts.join(""), functions: functions.filter((f) => !local.has(f)), outside, ...(missingName === undefined ? {} : { missingName }) };
   }
 
-  function named(value: string, sheet: string, at: CellPlace, depth: number, local: ReadonlySet<string>): PlainFormula | undefined {
+  function named(value: string, sheet: string, at: CellPlace, chain: readonly string[], local: ReadonlySet<string>): PlainFormula | undefined {
     const mark = value.lastIndexOf("!");
     const name = value.slice(mark + 1).toUpperCase();
     if (name.startsWith("_XLPM.") || (mark < 0 && local.has(name))) return undefined;
     const scope = mark < 0 ? sheet : value.slice(0, mark).replace(/^'|'$/g, "").replace(/''/g, "'");
     const text = names.get(`${scope.toUpperCase()}!${name}`) ?? names.get(`!${name}`);
     if (text === undefined) return undefined;
-    if (depth >= DEEPEST_NAME) return { text: "#NAME?", functions: [], outside: false };
+    if (chain.includes(`${scope}!${name}`) || ++namesRead > MOST_NAMES) return { text: "#NAME?", functions: [], outside: false, missingName: value };
     const here = cellName(at.column, at.row);
     const moved = translateFormulaToA1(translateFormulaToR1C1("=" + text, "A1"), here).slice(1);
-    const inner = read(moved, scope, at, depth + 1);
+    const inner = read(moved, scope, at, [...chain, `${scope}!${name}`]);
     const onlyRange = tokenize(moved).filter((t) => t.type !== tokenTypes.WHITESPACE).length === 1 && isRange(tokenize(moved).find((t) => t.type !== tokenTypes.WHITESPACE)!);
     return onlyRange ? inner : { ...inner, text: `(${inner.text})` };
   }
@@ -76,6 +91,7 @@ export function formulaReader(book: Pick<Workbook, "names" | "tables">, sheetAli
     const table = reference?.table ? tables.get(reference.table.toUpperCase()) : [...tables.values()].find((t) => t.sheet === sheet && holds(cellBox(t.ref), at));
     if (!reference || !table) return "#REF!";
     const box = tablePart(table, reference.columns ?? [], reference.sections ?? [], at);
+    if (box === "#VALUE!") return box;
     return box ? `${quoted(sheetAlias(table.sheet))}!${absolute(box)}` : "#REF!";
   }
 
@@ -90,7 +106,8 @@ export function formulaReader(book: Pick<Workbook, "names" | "tables">, sheetAli
 
   /** Reads one formula of a cell; `text` is what stands in its `<f>`, without "=". */
   return (text: string, sheet: string, at: CellPlace): PlainFormula => {
-    const plain = read("=" + text, sheet, at, 0);
+    namesRead = 0;
+    const plain = read("=" + text, sheet, at, []);
     return { ...plain, text: plain.text.startsWith("=") ? plain.text : "=" + plain.text };
   };
 }
@@ -105,12 +122,21 @@ function bareFunction(name: string): string {
   return name.replace(/^(?:_xlfn\.|_xlws\.|_xlpm\.)+/i, "").toUpperCase();
 }
 
-/** A book whose add-in link broke stores `[1]!WALL.X(…)` or `'path\[book]'!WALL.X(…)`: the call itself is what was meant. */
-export function withoutBrokenBook(text: string): string {
-  return text.replace(/("(?:[^"]|"")*")|(?:\[\d+\]|'(?:[^']|'')*')!(?=(?:_xldudf_)?WALL[._])/gi, (_whole, string: string | undefined) => string ?? "");
+/** Spellings of an add-in call in older files (`_xll.WALL.X`, `_xludf.WALL_X`, `WALL_X`), and `_xludf.` before a function of Excel's own: as newer files have them. */
+function ownSpelling(token: Token): Token {
+  if (token.type !== tokenTypes.FUNCTION) return token;
+  const bare = token.value.replace(/^(?:_xlfn\.|_xll\.|_xludf\.)+/i, "");
+  if (/^WALL_/i.test(bare)) return { ...token, value: `_xldudf_${bare}` };
+  if (/^(?:WALL\.|_xldudf_)/i.test(bare) || /^(?:_xlfn\.)*_xludf\./i.test(token.value)) return { ...token, value: bare };
+  return token;
 }
 
-function tablePart(table: BookTable, columns: readonly string[], sections: readonly string[], at: CellPlace): CellBox | undefined {
+/** A book whose add-in link broke stores `[1]!WALL.X(…)` or `'path\[book]'!WALL.X(…)`: the call itself is what was meant. `[0]!name` names this very book. */
+export function withoutBrokenBook(text: string): string {
+  return text.replace(/("(?:[^"]|"")*")|(?:\[\d+\]|'(?:[^']|'')*')!(?=(?:_xl[a-z]+[._])*WALL[._])|('(?:[^']|'')*')|\[0\]!/gi, (_whole, string?: string, quoted?: string) => string ?? quoted ?? "");
+}
+
+function tablePart(table: BookTable, columns: readonly string[], sections: readonly string[], at: CellPlace): CellBox | "#VALUE!" | undefined {
   const whole = cellBox(table.ref);
   let { left, right } = whole;
   if (columns.length > 0) {
@@ -121,11 +147,12 @@ function tablePart(table: BookTable, columns: readonly string[], sections: reado
   }
   const dataTop = whole.top + (table.hasHeadings ? 1 : 0);
   const dataBottom = whole.bottom - (table.hasTotals ? 1 : 0);
-  const rows: Record<string, [number, number]> = {
+  if (sections.some((s) => /^(?:this row|@)$/i.test(s)) && (at.row < dataTop || at.row > dataBottom)) return "#VALUE!";
+  const rows: Record<string, [number, number] | undefined> = {
     data: [dataTop, dataBottom],
     all: [whole.top, whole.bottom],
-    headers: [whole.top, whole.top],
-    totals: [whole.bottom, whole.bottom],
+    headers: table.hasHeadings ? [whole.top, whole.top] : undefined,
+    totals: table.hasTotals ? [whole.bottom, whole.bottom] : undefined,
     "this row": [at.row, at.row],
     "@": [at.row, at.row],
   };

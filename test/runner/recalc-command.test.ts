@@ -1,3 +1,4 @@
+import { strFromU8, strToU8, unzipSync, zipSync } from "fflate";
 import { chmodSync, linkSync, mkdtempSync, readdirSync, readFileSync, rmSync, statSync, symlinkSync, writeFileSync } from "node:fs";
 import os from "node:os";
 import path from "node:path";
@@ -18,7 +19,7 @@ describe("wallsheet recalc", () => {
     const { status, out, complaints } = recalcCommand([at("in.xlsx"), "-o", at("out.xlsx")]);
     expect([status, out]).toEqual([1, ""]);
     expect(complaints).toEqual([
-      "Wing!M9: left for Excel, its stored value kept: it uses the function CUBEVALUE, unknown here",
+      "Wing!M9: left for Excel, its stored value kept: it uses CUBEVALUE, which reads a data model",
       "Wing!M10: #VALUE! EDGE_SPEED needs cp of at most 1; row 1 has 2",
       expect.stringMatching(/in\.xlsx: 30 formulas calculated, 6 with WALL functions; \d+ cells changed$/),
     ]);
@@ -26,6 +27,52 @@ describe("wallsheet recalc", () => {
     expect(readFileSync(at("in.xlsx")).equals(BOOK)).toBe(true);
     recalcCommand([at("out.xlsx"), "-o", at("again.xlsx"), "--quiet"]);
     expect(readFileSync(at("again.xlsx")).equals(readFileSync(at("out.xlsx")))).toBe(true);
+  });
+
+  describe("--check", () => {
+    // Wing!M3 is the sum of the blow velocities: an invented error of 1e-6 of it is put into a book that was right.
+    const spoiled = () => {
+      recalcCommand([at("in.xlsx"), "-o", at("right.xlsx")]);
+      const parts = unzipSync(readFileSync(at("right.xlsx")));
+      const sheet = "xl/worksheets/sheet1.xml";
+      parts[sheet] = strToU8(strFromU8(parts[sheet]!).replace(/(<c r="M3"[^>]*>(?:(?!<\/c>).)*<v>)([^<]*)/, (_all, head: string, value: string) => head + Number(value) * (1 + 1e-6)));
+      writeFileSync(at("spoiled.xlsx"), zipSync(parts));
+    };
+
+    it("passes a book that holds what is calculated, naming what it could not compare, and writes nothing", () => {
+      recalcCommand([at("in.xlsx"), "-o", at("right.xlsx")]);
+      const { status, out, complaints } = recalcCommand(["--check", at("right.xlsx")]);
+      expect([status, out]).toEqual([0, ""]);
+      expect(complaints.at(-1)).toMatch(/right\.xlsx: 30 formulas compared, 1 not calculated here; 0 cells differ$/);
+      expect(readdirSync(folder).sort()).toEqual(["in.xlsx", "right.xlsx"]);
+    });
+
+    it("names the cells that differ by more than the tolerance, and ends with 1", () => {
+      spoiled();
+      const { status, out } = recalcCommand(["--check", "-q", at("spoiled.xlsx")]);
+      expect(status).toBe(1);
+      expect(out).toMatch(/^Wing!M3: stored \S+, calculated \S+, apart by 1\.0e-6 of the larger\n/);
+      expect(recalcCommand(["--check", "-q", "--tolerance", "1e-5", at("spoiled.xlsx")])).toEqual({ status: 0, out: "", complaints: [] });
+      expect(recalcCommand(["--check", "-q", "--floor", "1", at("spoiled.xlsx")]).status).toBe(0);
+      expect(recalcCommand(["--check", "-q", "--tolerance", "1e-7", at("spoiled.xlsx")]).status).toBe(1);
+    });
+
+    it("tells words, errors and empty cells apart", () => {
+      const { status, out } = recalcCommand(["--check", "-q", at("in.xlsx")]);
+      expect(status).toBe(1);
+      expect(out).toContain("calculated #VALUE!");
+    });
+
+    it.each([
+      [["--check", "-o", "out.xlsx"], /--check writes no book/],
+      [["--tolerance", "1e-3", "-o", "out.xlsx"], /belong to --check/],
+      [["--check", "--tolerance", "little"], /--tolerance needs a number/],
+      [["--check", "--floor=-1"], /--floor needs a number/],
+    ])("%j is refused with 2", (args, sentence) => {
+      const { status, complaints } = recalcCommand([...args, at("in.xlsx")]);
+      expect(status).toBe(2);
+      expect(complaints[0]).toMatch(sentence);
+    });
   });
 
   it("says nothing with --quiet", () => {

@@ -10,6 +10,11 @@ const names = [
   { name: "start", sheet: "Wing", text: "0.5" },
   { name: "beside", sheet: undefined, text: "Wing!B1" },
   { name: "circle", sheet: undefined, text: "circle+1" },
+  { name: "square", sheet: undefined, text: "_xlfn.LAMBDA(_xlpm.x,_xlpm.x^2)" },
+  { name: "factorial", sheet: undefined, text: "_xlfn.LAMBDA(_xlpm.n,IF(_xlpm.n<2,1,_xlpm.n*factorial(_xlpm.n-1)))" },
+  { name: "RATE", sheet: undefined, text: "Air!$B$2" },
+  ...Array.from({ length: 30 }, (_, i) => ({ name: `laugh${i}`, sheet: undefined, text: `laugh${i + 1}+laugh${i + 1}` })),
+  { name: "laugh30", sheet: undefined, text: "1" },
 ];
 const read = formulaReader({ names, tables: [table] }, (name) => (name === "It's" ? "It’s" : name));
 const plain = (text: string, sheet = "Wing", column = 3, row = 4) => read(text, sheet, { column, row }).text;
@@ -26,6 +31,18 @@ test.each([
   ["SUM(Runs[[run]:[speed ue]])", "=SUM('Data'!$B$3:$C$5)"],
   ["Runs[none]", "=#REF!"],
   ["'It''s'!A1", "='It’s'!A1"],
+  ["SUM(Runs)", "=SUM('Data'!$B$3:$D$5)"], // the table's bare name, as other writers store it
+  ["square(3)+RATE(48,-200,8000)+RATE", "=(_xlfn.LAMBDA(_xlpm.x,_xlpm.x^2))(3)+RATE(48,-200,8000)+Air!$B$2"],
+  ["[0]!twice&\"[0]!\"", "=(2*Air!$B$1)&\"[0]!\""],
+  ["#REF!A1+1", "=#REF!+1"],
+  ["'Übersicht 風'!$A$1+'O''Brien'!B2", "='Übersicht 風'!$A$1+'O''Brien'!B2"],
+  // Add-in calls as older files and other writers spell them.
+  ["_xll.WALL.COLUMN_OF(A1,B1)", "=WALL.COLUMN_OF(A1,B1)"],
+  ["_xludf.WALL.COLUMN_OF(A1,B1)", "=WALL.COLUMN_OF(A1,B1)"],
+  ["_xlfn._xldudf_wall_column_of(A1,B1)", "=_xldudf_wall_column_of(A1,B1)"],
+  ["WALL_COLUMN_OF(A1,B1)", "=_xldudf_WALL_COLUMN_OF(A1,B1)"],
+  ["[3]!_xll.WALL.COLUMN_OF(A1,B1)", "=WALL.COLUMN_OF(A1,B1)"],
+  ["_xlfn._xludf.XLOOKUP(1,A1,B1)", "=XLOOKUP(1,A1,B1)"],
   ["[1]!WALL.COLUMN_OF(A1,B1)", "=WALL.COLUMN_OF(A1,B1)"],
   ["'C:\\old\\[add.xlam]'!_xldudf_WALL_COLUMN_OF(A1,B1)", "=_xldudf_WALL_COLUMN_OF(A1,B1)"],
 ])("the stored %s is read as %s", (stored, expected) => {
@@ -34,6 +51,22 @@ test.each([
 
 test("the row of a table is the formula's own", () => {
   expect(plain("Runs[[#This Row],[cp]]*2", "Data", 6, 4)).toBe("='Data'!$D$4*2");
+});
+
+test("the row of a table has no value beside its rows, and a part it lacks no reference", () => {
+  expect(plain("Runs[[#This Row],[cp]]", "Data", 6, 9)).toBe("=#VALUE!");
+  const bare = formulaReader({ names: [], tables: [{ ...table, hasHeadings: false, hasTotals: false }] });
+  expect(["Runs[[#Headers],[cp]]", "Runs[[#Totals],[cp]]", "Runs[cp]"].map((text) => bare(text, "Data", { column: 6, row: 4 }).text)).toEqual(["=#REF!", "=#REF!", "='Data'!$D$2:$D$6"]);
+});
+
+test("names made to exhaust the reader, and a LAMBDA that calls itself, are told and not unfolded", () => {
+  const at = { column: 1, row: 1 };
+  expect(read("laugh0", "Wing", at).missingName).toMatch(/^laugh/);
+  expect(read("factorial(5)", "Wing", at).missingName).toBe("factorial");
+});
+
+test("a name of another book is a link to it, though this book has a name like it", () => {
+  expect(read("[1]!twice", "Wing", { column: 1, row: 1 }).outside).toBe(true);
 });
 
 test("a name that refers to itself ends in #NAME? and not in a hang", () => {

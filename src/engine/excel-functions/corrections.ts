@@ -1,6 +1,6 @@
 /** Functions the engine (19.3.7) has, but with other values or error codes than Excel. */
 import { isEngineError } from "../engine-values";
-import type { EngineArgument, EngineLibrary, EngineValue } from "../types";
+import type { EngineArgument, EngineError, EngineLibrary, EngineValue } from "../types";
 import { correct, numberOf } from "./define";
 import { fail } from "./elementary";
 
@@ -8,6 +8,8 @@ import { fail } from "./elementary";
 const OUT_OF_RANGE_IS_NUM = ["SQRT", "LN", "LOG", "ASIN", "ACOS", "ACOSH", "ATANH", "LARGE", "SMALL", "PERCENTILE", "PERCENTILE.INC", "PERCENTILE.EXC", "QUARTILE", "QUARTILE.INC", "QUARTILE.EXC"];
 /** Without a match Excel gives #N/A. */
 const NO_MATCH_IS_NA = ["IFS", "SWITCH"];
+/** How the sentence begins of a TEXT whose format is beyond the engine. */
+export const UNKNOWN_FORMAT = "TEXT's format";
 const SCIENTIFIC_FORMAT = /^([0#]+)(?:\.([0#]+))?E([+-])(0+)$/i;
 
 export function installCorrections(library: EngineLibrary): void {
@@ -48,7 +50,7 @@ function indexAlongARow(library: EngineLibrary): void {
   });
 }
 
-/** TEXT with a format such as 0.00E+00, which the engine's format reader does not know. */
+/** TEXT with a format such as 0.00E+00, which the engine's format reader does not know; it throws on others it does not know, and on texts. */
 function correctText(library: EngineLibrary): void {
   const registry = library.registries.functionRegistry;
   const entry = registry.content.TEXT!;
@@ -58,7 +60,11 @@ function correctText(library: EngineLibrary): void {
     compute(...args) {
       const [value, format] = args.map((arg) => (Array.isArray(arg) ? arg[0]?.[0] : arg));
       const match = typeof format?.value === "string" ? SCIENTIFIC_FORMAT.exec(format.value) : null;
-      if (!match || typeof value?.value !== "number") return original.apply(this, args);
+      if (typeof value?.value === "string" && !isEngineError(value) && typeof format?.value === "string" && Number.isNaN(Number(value.value || NaN))) {
+        // A text is shown as it is, except in a format with a section for texts, and except where it spells a number.
+        return format.value.includes("@") && format.value !== "@" ? notHere(library, format.value) : { value: value.value };
+      }
+      if (!match || typeof value?.value !== "number") return readFormat(library, () => original.apply(this, args), String(format?.value));
       const [, , decimals = "", sign, digits] = match;
       const [mantissa, power] = value.value.toExponential(decimals.length).split("e") as [string, string];
       const optional = decimals.length - decimals.replace(/#+$/, "").length;
@@ -67,6 +73,22 @@ function correctText(library: EngineLibrary): void {
       return { value: `${shown}E${exponent < 0 ? "-" : sign === "+" ? "+" : ""}${String(Math.abs(exponent)).padStart(digits!.length, "0")}` };
     },
   });
+}
+
+/** What the engine's format reader gives; where it stumbles, a sentence that the runner knows (why-left.ts). */
+function readFormat(library: EngineLibrary, read: () => EngineArgument | EngineError, format: string): EngineArgument | EngineError {
+  const stumbled = (given: EngineArgument | EngineError) => /^An unexpected error/.test(String((given as EngineValue | undefined)?.message ?? ""));
+  try {
+    const given = read();
+    return stumbled(given) ? notHere(library, format) : given;
+  } catch (error) {
+    if (isEngineError(error as EngineArgument) && !stumbled(error as EngineError)) throw error;
+    return notHere(library, format);
+  }
+}
+
+function notHere(library: EngineLibrary, format: string): EngineError {
+  return new library.EvaluationError(`${UNKNOWN_FORMAT} "${format}" is not known here.`, "#ERROR");
 }
 
 /** Half away from zero on the 15 digits Excel sees. */

@@ -28,7 +28,6 @@ export function installElementary(library: EngineLibrary): void {
   one("ERF.PRECISE", "Error function from 0 to the limit.", errorFunction);
   one("ERFC", "Complementary error function.", complementaryErrorFunction);
   one("ERFC.PRECISE", "Complementary error function.", complementaryErrorFunction);
-  one("GAMMALN", "Natural logarithm of the gamma function.", (x) => (x > 0 ? asNumber(formulajs.GAMMALN(x)) : fail("GAMMALN needs a number above 0.")));
   addMissing(library, "ERF", "Error function between two limits, or from 0.", ["lower_limit (number)", "upper_limit (number, optional)"], (a, b) =>
     b === undefined ? errorFunction(numberOf(a)) : errorFunction(numberOf(b)) - errorFunction(numberOf(a)),
   );

@@ -1,4 +1,4 @@
-/** Statistics Excel has and the engine (19.3.7) lacks. Distributions whose formulajs version is not good to 1e-12 are our own. */
+/** Statistics Excel has and the engine (19.3.7) lacks; the distributions made from the incomplete gamma and beta functions stand in distributions.ts. */
 import * as formulajs from "@formulajs/formulajs";
 import type { EngineArgument, EngineLibrary } from "../types";
 import { addMissing, numberOf, numbersOf } from "./define";
@@ -6,9 +6,6 @@ import { asNumber, fail } from "./elementary";
 import { normalDensity, normalProbability, normalQuantile } from "./error-function";
 import { studentTwoTails, studentTwoTailsQuantile } from "./student";
 
-/**
- * Adds them. F with one degree of freedom above is Student's t squared; formulajs is good to 1e-9 only there.
- */
 export function installStatistics(library: EngineLibrary): void {
   const pooled = (name: string, description: string, least: number, f: (numbers: number[]) => number) =>
     addMissing(library, name, description, ["number (any, range, repeating)"], (...args) => {
@@ -24,6 +21,11 @@ export function installStatistics(library: EngineLibrary): void {
   pooled("GEOMEAN", "Geometric mean.", 1, (x) => (x.some((v) => v <= 0) ? fail("GEOMEAN needs numbers above 0.") : Math.exp(mean(x.map(Math.log)))));
   pooled("HARMEAN", "Harmonic mean.", 1, (x) => (x.some((v) => v <= 0) ? fail("HARMEAN needs numbers above 0.") : 1 / mean(x.map((v) => 1 / v))));
   pooled("SKEW", "Skewness of a sample.", 3, (x) => asNumber(formulajs.SKEW(...x)));
+  pooled("SKEW.P", "Skewness of a whole population.", 3, (x) => {
+    const m = mean(x);
+    const spread = mean(x.map((v) => (v - m) ** 2));
+    return spread === 0 ? fail("SKEW.P needs numbers that differ.", "#DIV/0!") : mean(x.map((v) => (v - m) ** 3)) / spread ** 1.5;
+  });
   pooled("KURT", "Excess kurtosis of a sample.", 4, (x) => asNumber(formulajs.KURT(...x)));
   pooled("MODE.SNGL", "Most frequent number.", 1, mode);
   pooled("MODE", "Most frequent number.", 1, mode);
@@ -34,8 +36,9 @@ export function installStatistics(library: EngineLibrary): void {
     return best + (equal - 1) / 2;
   });
   for (const name of ["PERCENTRANK", "PERCENTRANK.INC"]) {
-    addMissing(library, name, "Share of a list below a number, ends included.", ["list (any, range)", "number (number)", "digits (number, optional)"], (list, x, digits) => percentRank(numbersOf([list]), numberOf(x), numberOf(digits, 3)));
+    addMissing(library, name, "Share of a list below a number, ends included.", ["list (any, range)", "number (number)", "digits (number, optional)"], (list, x, digits) => percentRank(numbersOf([list]), numberOf(x), numberOf(digits, 3), 0));
   }
+  addMissing(library, "PERCENTRANK.EXC", "Share of a list below a number, ends excluded.", ["list (any, range)", "number (number)", "digits (number, optional)"], (list, x, digits) => percentRank(numbersOf([list]), numberOf(x), numberOf(digits, 3), 1));
 
   numbers(["STANDARDIZE"], "Distance from the mean in standard deviations.", "x mean standard_deviation", (x, m, s) => (x - m) / positive("STANDARDIZE", s));
   numbers(["NORM.DIST", "NORMDIST"], "Normal distribution.", "x mean standard_deviation cumulative", (x, m, s, cumulative) => {
@@ -48,18 +51,13 @@ export function installStatistics(library: EngineLibrary): void {
   numbers(["NORM.S.INV", "NORMSINV"], "Number below which a share of the standard normal distribution lies.", "probability", (p) => normalQuantile(share("NORM.S.INV", p)));
   numbers(["CONFIDENCE.NORM", "CONFIDENCE"], "Half width of a confidence interval, standard deviation known.", "alpha standard_deviation size", (a, s, n) => (positive("CONFIDENCE.NORM", s) * normalQuantile(1 - share("CONFIDENCE.NORM", a) / 2)) / Math.sqrt(n));
   numbers(["CONFIDENCE.T"], "Half width of a confidence interval by Student's t.", "alpha standard_deviation size", (a, s, n) => (positive("CONFIDENCE.T", s) * studentTwoTailsQuantile(share("CONFIDENCE.T", a), atLeastOne(n - 1))) / Math.sqrt(n));
-  numbers(["F.DIST.RT", "FDIST"], "Right tail of the F distribution.", "x degrees1 degrees2", (x, a, b) => (Math.trunc(a) === 1 && x >= 0 ? studentTwoTails(Math.sqrt(x), atLeastOne(b)) : asNumber(formulajs.F.DIST.RT(x, a, b))));
-  numbers(["F.INV.RT", "FINV"], "Number above which a share of the F distribution lies.", "probability degrees1 degrees2", (p, a, b) => (Math.trunc(a) === 1 ? studentTwoTailsQuantile(share("F.INV.RT", p), atLeastOne(b)) ** 2 : asNumber(formulajs.F.INV.RT(share("F.INV.RT", p), a, b))));
   numbers(["T.DIST.2T"], "Both tails of Student's t distribution.", "x degrees", (x, n) => (x < 0 ? fail("T.DIST.2T needs x of at least 0.") : studentTwoTails(x, atLeastOne(n))));
   numbers(["T.DIST.RT"], "Right tail of Student's t distribution.", "x degrees", (x, n) => (x < 0 ? 1 - studentTwoTails(-x, atLeastOne(n)) / 2 : studentTwoTails(x, atLeastOne(n)) / 2));
   numbers(["T.INV.2T", "TINV"], "Number outside which a share of Student's t distribution lies.", "probability degrees", (p, n) => studentTwoTailsQuantile(share("T.INV.2T", p), atLeastOne(n)));
   numbers(["T.INV"], "Number below which a share of Student's t distribution lies.", "probability degrees", (p, n) =>
     p === 0.5 ? 0 : Math.sign(p - 0.5) * studentTwoTailsQuantile(2 * Math.min(share("T.INV", p), 1 - p), atLeastOne(n)),
   );
-  numbers(["CHISQ.DIST.RT", "CHIDIST"], "Right tail of the chi-squared distribution.", "x degrees", (x, n) => asNumber(formulajs.CHIDISTRT(x, n)));
   numbers(["EXPON.DIST", "EXPONDIST"], "Exponential distribution.", "x lambda cumulative", (x, l, c) => (x < 0 ? fail("EXPON.DIST needs x of at least 0.") : c ? -Math.expm1(-positive("EXPON.DIST", l) * x) : l * Math.exp(-l * x)));
-  numbers(["POISSON.DIST", "POISSON"], "Poisson distribution.", "x mean cumulative", (x, m, c) => asNumber(formulajs.POISSON.DIST(Math.trunc(x), m, Boolean(c))));
-  numbers(["BINOM.DIST", "BINOMDIST"], "Binomial distribution.", "successes trials probability cumulative", (k, n, p, c) => asNumber(formulajs.BINOM.DIST(Math.trunc(k), Math.trunc(n), p, Boolean(c))));
   numbers(["FISHER"], "Fisher transformation.", "x", (x) => (Math.abs(x) < 1 ? Math.atanh(x) : fail("FISHER needs a number between -1 and 1.")));
   numbers(["FISHERINV"], "Inverse of the Fisher transformation.", "y", Math.tanh);
   addMissing(library, "FORECAST.LINEAR", "Value at x on the straight line through known points.", ["x (number)", "known_y (any, range)", "known_x (any, range)"], (x, ys, xs) => straightLine(numberOf(x), numbersOf([ys]), numbersOf([xs])));
@@ -95,12 +93,12 @@ function rank(x: EngineArgument, list: EngineArgument, order: EngineArgument): {
   return { best: 1 + numbers.filter((v) => (ascending ? v < value : v > value)).length, equal };
 }
 
-function percentRank(list: number[], x: number, digits: number): number {
+function percentRank(list: number[], x: number, digits: number, outside: 0 | 1): number {
   const sorted = list.sort((a, b) => a - b);
   if (sorted.length === 0 || x < sorted[0]! || x > sorted.at(-1)!) fail("The number lies outside the list.", "#N/A");
   const below = sorted.filter((v) => v < x).length;
   const between = sorted[below] === x ? 0 : (x - sorted[below - 1]!) / (sorted[below]! - sorted[below - 1]!) - 1;
-  const share = sorted.length === 1 ? 1 : (below + between) / (sorted.length - 1);
+  const share = sorted.length === 1 && outside === 0 ? 1 : (below + between + outside) / (sorted.length - 1 + 2 * outside);
   return Math.floor(Number((share * 10 ** digits).toPrecision(15))) / 10 ** digits;
 }
 

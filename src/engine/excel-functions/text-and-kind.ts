@@ -4,6 +4,7 @@ import { ERROR_CONSTANT, SINGLE } from "../normalise-formula";
 import type { EngineArgument, EngineContext, EngineLibrary, EngineValue } from "../types";
 import { ExcelError, addMissing, define, numberOf, rowFirst } from "./define";
 import { fail } from "./elementary";
+import { roundDecimal } from "./corrections";
 import { excelNumberText } from "./number-text";
 
 /** Hidden function behind `&`: the engine's CONCATENATE would join a whole array into one text. */
@@ -32,6 +33,21 @@ export function installTextAndKind(library: EngineLibrary): void {
     const count = Math.trunc(numberOf(times));
     const piece = textOf(text);
     return count < 0 || piece.length * count > LONGEST_TEXT ? fail("REPT cannot repeat a text so often.", "#VALUE!") : piece.repeat(count);
+  });
+  addMissing(library, "FIXED", "A number as text with a fixed number of decimals.", ["number (number)", "decimals (number, optional)", "no_commas (boolean, optional)"], (number, decimals, plain) => {
+    const places = Math.trunc(numberOf(decimals, 2));
+    if (places > 100) fail("FIXED shows at most 100 decimals.", "#VALUE!");
+    const [whole, part] = Math.abs(roundDecimal(numberOf(number), places)).toFixed(Math.max(places, 0)).split(".");
+    const shown = numberOf(plain) !== 0 ? whole! : whole!.replace(/\B(?=(\d{3})+$)/g, ",");
+    return `${numberOf(number) < 0 && /[1-9]/.test(whole! + (part ?? "")) ? "-" : ""}${shown}${part === undefined ? "" : `.${part}`}`;
+  });
+  addMissing(library, "NUMBERVALUE", "The number a text spells, with given separators.", ["text (any)", "decimal_mark (string, optional)", "group_mark (string, optional)"], (text, decimal, group) => {
+    const [point, comma] = [decimal === undefined ? "." : textOf(decimal)[0], group === undefined ? "," : textOf(group)[0]];
+    const [, body, percents] = /^(.*?)(%*)$/s.exec(textOf(text).replace(/\s/g, ""))!;
+    const [whole, ...rest] = body!.split(point ?? ".");
+    const spelt = [whole!.split(comma ?? ",").join(""), ...rest].join(".");
+    if (spelt === "") return 0;
+    return /^[+-]?(?:\d+\.?\d*|\.\d+)(?:E[+-]?\d+)?$/i.test(spelt) ? Number(spelt) / 100 ** percents!.length : fail(`"${textOf(text)}" spells no number.`, "#VALUE!");
   });
   addMissing(library, "UNICODE", "Number of the first character.", ["text (any)"], (text) => textOf(text).codePointAt(0) ?? fail("UNICODE needs a text.", "#VALUE!"));
   addMissing(library, "CODE", "Number of the first character.", ["text (any)"], (text) => {
