@@ -1,6 +1,7 @@
 import project from "../../package.json";
 import { CAUTIONS } from "../cells/cautions";
 import { catalogue } from "../cells/generated/catalogue";
+import { wallFunctions } from "../cells/generated/functions";
 import { tableRemarks } from "../cells/reading/table-remarks";
 import { prepareEngine } from "../engine/prepare-engine";
 import { wallSheetFunctions } from "../engine/wall-functions";
@@ -59,7 +60,14 @@ async function start(): Promise<void> {
     saved = changed ? "" : model.session.getRevisionId();
     const app = await mountGrid(owl, library, model, byId("grid"), speak);
     const host = gridHost(model);
-    const pane = mountPane(byId("pane"), host, catalogue);
+    const pane = mountPane(byId("pane"), host, catalogue, {
+      call: (called, args) => wallFunctions[called]!(...args, {}),
+      plainCopy: savePlain,
+      books: [
+        { name: "Starter book", words: "invented scenarios: a glider's wing section from taps to drag, three laminar marches, a hull plate", open: () => replaceBook(() => showStarter()) },
+        { name: "Empty book", words: "one empty sheet", open: () => replaceBook(() => show({}, "book.xlsx")) },
+      ],
+    });
     const owner = {};
     model.on("update", owner, follow);
     close = () => {

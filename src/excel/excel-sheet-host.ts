@@ -25,6 +25,7 @@ export function excelSheetHost(): SheetHost {
       batch(async (context) => {
         rangeOf(context, { ...at, right: at.left, bottom: at.top }).formulas = [[formula]];
         await context.sync();
+        if (/\bWALL\./i.test(formula)) await loadWithBook();
       }),
     writeValues: (at, rows) =>
       batch(async (context) => {
@@ -46,6 +47,15 @@ export function excelSheetHost(): SheetHost {
       }),
     whenChanged: watch,
   };
+}
+
+let isLoadedWithBook = false;
+
+/** Has Excel start the functions with this book from now on, so that they live when it is opened again. An Excel that cannot keeps its own way. */
+async function loadWithBook(): Promise<void> {
+  if (isLoadedWithBook || !Office.context?.requirements?.isSetSupported("SharedRuntime", "1.1")) return;
+  await Office.addin.setStartupBehavior(Office.StartupBehavior.load);
+  isLoadedWithBook = true;
 }
 
 /** Text that a sheet would take for a formula is written as text. */

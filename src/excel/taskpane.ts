@@ -1,4 +1,5 @@
 import { catalogue } from "../cells/generated/catalogue";
+import { wallFunctions } from "../cells/generated/functions";
 import { mountPane } from "../pane/mount-pane";
 import { excelSheetHost } from "./excel-sheet-host";
 
@@ -9,5 +10,5 @@ void Office.onReady((info) => {
     root.textContent = "This page is Wallsheet's pane in Excel. Without Excel, use the bench: npm start.";
     return;
   }
-  mountPane(root, excelSheetHost(), catalogue);
+  mountPane(root, excelSheetHost(), catalogue, { call: (name, args) => wallFunctions[name]!(...args, {}) });
 });

@@ -2,6 +2,7 @@ import type { CatalogueEntry } from "../cells/catalogue-entry";
 import { element } from "./element";
 import { callPattern } from "./form-formula";
 import { insertForm, type InsertForm } from "./insert-form";
+import type { CallFunction } from "./preview";
 import type { SheetHost } from "./sheet-host";
 
 export interface FunctionCard {
@@ -11,9 +12,9 @@ export interface FunctionCard {
 }
 
 /** All there is to know of one function, and the form that inserts it. */
-export function functionCard(entry: CatalogueEntry, host: SheetHost, back: () => void, say: (sentence: string, isFault?: boolean) => void): FunctionCard {
+export function functionCard(entry: CatalogueEntry, host: SheetHost, back: () => void, say: (sentence: string, isFault?: boolean) => void, call?: CallFunction): FunctionCard {
   const title = element("h2", { class: "wl-title", tabindex: "-1" }, entry.name);
-  const form = insertForm(entry, host, say);
+  const form = insertForm(entry, host, say, call);
   const root = element(
     "article",
     { class: "wl-card", "aria-label": entry.name },

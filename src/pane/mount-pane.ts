@@ -5,8 +5,11 @@ import { functionCard, type FunctionCard } from "./function-card";
 import { functionList } from "./function-list";
 import { checkPage } from "./check-page";
 import { lookPage } from "./look-page";
+import type { CallFunction } from "./preview";
 import { selectedCell } from "./selected-cell";
+import { sharePage, type ShareActions } from "./share-page";
 import type { SheetHost } from "./sheet-host";
+import { startPage, type StarterBook } from "./start-page";
 
 export interface Pane {
   /** Opens a function's card by its name without namespace; an unknown name shows the list. */
@@ -15,8 +18,16 @@ export interface Pane {
   close(): void;
 }
 
+/** What a host's page adds to the pane. */
+export interface PaneExtras extends ShareActions {
+  /** Calls a compiled function, for previews; none are shown without it. */
+  call?: CallFunction;
+  /** Books to begin with. */
+  books?: readonly StarterBook[];
+}
+
 /** Builds the pane inside `root` (its style sheet is pane.css) and lets it follow the host's selection. */
-export function mountPane(root: HTMLElement, host: SheetHost, catalogue: readonly CatalogueEntry[]): Pane {
+export function mountPane(root: HTMLElement, host: SheetHost, catalogue: readonly CatalogueEntry[], extras: PaneExtras = {}): Pane {
   const status = element("p", { class: "wl-status", role: "status" });
   const say = (sentence: string, isFault = false) => {
     status.textContent = sentence;
@@ -36,10 +47,14 @@ export function mountPane(root: HTMLElement, host: SheetHost, catalogue: readonl
   };
   const look = lookPage(host, openByName, say);
   const check = checkPage(host, say);
+  const share = sharePage(host, catalogue, extras, say);
+  const startWith = startPage(host, extras.books ?? [], say);
   const pages = {
     Find: () => body.replaceChildren(card?.root ?? list.root),
     Look: () => body.replaceChildren(look.root),
     Check: () => body.replaceChildren(check.root),
+    Share: () => body.replaceChildren(share),
+    Start: () => body.replaceChildren(startWith),
   };
   let page: keyof typeof pages = "Find";
   const tabs = (Object.keys(pages) as (keyof typeof pages)[]).map((name) => element("button", { type: "button", class: "wl-tab", click: () => turnTo(name) }, name));
@@ -58,7 +73,7 @@ export function mountPane(root: HTMLElement, host: SheetHost, catalogue: readonl
   }
 
   function showCard(entry: CatalogueEntry): void {
-    const shown = functionCard(entry, host, () => showList(entry.name), say);
+    const shown = functionCard(entry, host, () => showList(entry.name), say, extras.call);
     card = shown;
     turnTo("Find");
     shown.focus();

@@ -53,6 +53,8 @@ test("a single cell tells its formula, its error, or the cell that spilled it", 
 test("a formula goes into the block's first cell", async () => {
   await host.writeFormula(block("Sheet1", 2, 2, 5, 9), "=WALL.EDGE_SPEED(A1,20)");
   expect(book.cell("Sheet1", "C3")?.formula).toBe("=WALL.EDGE_SPEED(A1,20)");
+  // A book with our functions starts them when it is opened again.
+  expect(book.startup).toBe("Load");
 });
 
 test("values are written as they are, and text never becomes a formula", async () => {

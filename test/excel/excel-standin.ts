@@ -11,6 +11,8 @@ export interface StandInCell {
 }
 
 export class StandInBook {
+  /** Set by Office.addin.setStartupBehavior. */
+  startup: string | undefined;
   sheets = new Map<string, Map<string, StandInCell>>();
   selected = { sheet: "Sheet1", address: "A1" };
   several = false;
@@ -38,7 +40,13 @@ export function installStandIn(book: StandInBook): void {
     const work = (second ?? first) as (context: unknown) => Promise<unknown>;
     return work(second ? first : contextOf(book)); // Excel.run(context, work) goes on in that context
   };
-  Object.assign(globalThis, { Excel: { run, ChartType: { xyscatterLinesNoMarkers: "XYScatterLinesNoMarkers" }, ChartSeriesBy: { columns: "Columns" } } });
+  // Which start-up behaviour a book was given; Excel keeps it in the file.
+  const Office = {
+    context: { requirements: { isSetSupported: (set: string) => set === "SharedRuntime" } },
+    addin: { setStartupBehavior: async (behaviour: string) => void (book.startup = behaviour) },
+    StartupBehavior: { load: "Load", none: "None" },
+  };
+  Object.assign(globalThis, { Office, Excel: { run, ChartType: { xyscatterLinesNoMarkers: "XYScatterLinesNoMarkers" }, ChartSeriesBy: { columns: "Columns" } } });
 }
 
 function contextOf(book: StandInBook) {

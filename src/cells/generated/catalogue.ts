@@ -942,7 +942,7 @@ export const catalogue: readonly CatalogueEntry[] = [
       },
       {
         "name": "options",
-        "description": "Two columns (label, value) or text: start momentum loss, start shape, onset (none, free, a station, from start), onset criterion (Michel), edge fit (spline, monotone, smooth), noise, grid refinement (1 to 8), Richardson (no, yes), after separation (stop), columns.",
+        "description": "Two columns (label, value) or text: start momentum loss, start shape, onset (none, free, a station, from start), onset criterion (Michel), turbulence level, edge fit (spline, monotone, smooth), noise, grid refinement (1 to 8), Richardson (no, yes), after separation (stop), columns.",
         "unit": "as their labels say",
         "optional": true
       },
@@ -1500,7 +1500,7 @@ export const catalogue: readonly CatalogueEntry[] = [
       },
       {
         "name": "options",
-        "description": "Two columns (label, value) or text: onset (free, a station, from start, none), onset criterion (Michel), trip momentum loss, transition zone (none, Dhawan-Narasimha), laminar method (Thwaites, energy, field), turbulent method (lag, entrainment, field), start momentum loss, start shape, reference Mach with reference speed, gamma, edge fit (spline, monotone, smooth), noise, after separation (stop, continue), columns.",
+        "description": "Two columns (label, value) or text: onset (free, a station, from start, none), onset criterion (Michel), turbulence level, trip momentum loss, transition zone (none, Dhawan-Narasimha), laminar method (Thwaites, energy, field), turbulent method (lag, entrainment, field), start momentum loss, start shape, reference Mach with reference speed, gamma, edge fit (spline, monotone, smooth), noise, after separation (stop, continue), columns.",
         "unit": "as their labels say",
         "optional": true
       },

@@ -31,7 +31,7 @@ const ACCEPTED = [
  * @param {any[][]} x Stations along the wall, rising.
  * @param {any[][]} ue Edge speed at each station, above 0; the first may be 0 (stagnation point).
  * @param {any} nu Kinematic viscosity.
- * @param {any[][]} [options] Two columns (label, value) or text: start momentum loss, start shape, onset (none, free, a station, from start), onset criterion (Michel), edge fit (spline, monotone, smooth), noise, grid refinement (1 to 8), Richardson (no, yes), after separation (stop), columns.
+ * @param {any[][]} [options] Two columns (label, value) or text: start momentum loss, start shape, onset (none, free, a station, from start), onset criterion (Michel), turbulence level, edge fit (spline, monotone, smooth), noise, grid refinement (1 to 8), Richardson (no, yes), after separation (stop), columns.
  * @param {any[][]} [radius] Distance of the wall from the axis of a round body at each station; the first may be 0 (nose).
  * @param {any[][]} [wall_velocity] Speed of the fluid through the wall at each station: above 0 blowing, below 0 suction.
  * @param {CustomFunctions.Invocation} invocation Filled in by the host.

@@ -39,7 +39,7 @@ const ACCEPTED = [
  * @param {any[][]} x Stations along the wall from where the layer begins, rising.
  * @param {any[][]} ue Edge speed at each station, above 0; the first may be 0 (stagnation point).
  * @param {any} nu Kinematic viscosity; with a reference Mach number that of the reference stream.
- * @param {any[][]} [options] Two columns (label, value) or text: onset (free, a station, from start, none), onset criterion (Michel), trip momentum loss, transition zone (none, Dhawan-Narasimha), laminar method (Thwaites, energy, field), turbulent method (lag, entrainment, field), start momentum loss, start shape, reference Mach with reference speed, gamma, edge fit (spline, monotone, smooth), noise, after separation (stop, continue), columns.
+ * @param {any[][]} [options] Two columns (label, value) or text: onset (free, a station, from start, none), onset criterion (Michel), turbulence level, trip momentum loss, transition zone (none, Dhawan-Narasimha), laminar method (Thwaites, energy, field), turbulent method (lag, entrainment, field), start momentum loss, start shape, reference Mach with reference speed, gamma, edge fit (spline, monotone, smooth), noise, after separation (stop, continue), columns.
  * @param {any[][]} [radius] Distance of the wall from the axis of a round body at each station; the first may be 0 (nose).
  * @param {CustomFunctions.Invocation} invocation Filled in by the host.
  * @returns {any[][]} A heading row, then a row a station: state is laminar, transition, bubble, turbulent or separated; beyond the end of the layer the numbers are empty and the note says why.
