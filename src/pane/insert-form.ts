@@ -31,7 +31,7 @@ export function insertForm(entry: CatalogueEntry, host: SheetHost, say: (sentenc
   const place = element("input", { id: "wl-place", type: "text", autocomplete: "off", spellcheck: "false", class: "wl-place" });
   const formed = element("output", { class: "wl-formula", for: inputs.map((input) => input.id).join(" ") });
   const origin = element("p", { class: "wl-quiet" });
-  const shown = element("div", { class: "wl-preview", role: "region", "aria-label": "Preview", "aria-live": "polite" });
+  const shown = element("div", { class: "wl-preview", tabindex: "0", role: "region", "aria-label": "Preview", "aria-live": "polite" });
   const withChart = element("input", { id: "wl-with-chart", type: "checkbox" });
   const labels = optionLabels(entry);
   let placeIsWritten = false;
