@@ -8,6 +8,7 @@ const HtmlWebpackPlugin = require("html-webpack-plugin");
 const { require: requireTypeScript } = require("tsx/cjs/api");
 const { cellFunctionFiles } = requireTypeScript("./src/record/cell-function-files.ts", __filename);
 const { helpPage } = requireTypeScript("./src/help/help-page.ts", __filename);
+const { functionPage } = requireTypeScript("./src/help/function-page.ts", __filename);
 const { catalogue } = requireTypeScript("./src/cells/generated/catalogue.ts", __filename);
 const benchPages = require("./.config/bench-pages.cjs");
 
@@ -26,7 +27,7 @@ class CompleteMetadata {
       const asset = compilation.getAsset("functions.json");
       if (!asset) return; // the generator has reported its errors already
       const made = JSON.parse(asset.source.source().toString());
-      for (const f of made.functions) f.helpUrl = `${origin}/help.html#${f.name}`;
+      for (const f of made.functions) f.helpUrl = `${origin}/help/${f.name}.html`;
       const complete = { allowErrorForDataTypeAny: true, ...made };
       compilation.updateAsset("functions.json", new compiler.webpack.sources.RawSource(JSON.stringify(complete, null, 2)));
     });
@@ -74,6 +75,7 @@ const excel = {
       officeScript: OFFICE_SCRIPT,
     }),
     new EmitText("help.html", () => helpPage(catalogue)),
+    ...catalogue.map((entry) => new EmitText(`help/${entry.name}.html`, () => functionPage(entry, catalogue))),
     new EmitText("manifest.xml", () => fs.readFileSync("manifest.xml", "utf8").replaceAll(DEVELOPMENT_ORIGIN, origin)),
     new CopyWebpackPlugin({ patterns: [{ from: "src/excel/icons/*.png", to: "icons/[name][ext]" }, "LICENSE"] }),
   ],

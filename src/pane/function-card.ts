@@ -23,6 +23,7 @@ export function functionCard(entry: CatalogueEntry, host: SheetHost, back: () =>
     element("p", { class: "wl-quiet wl-family-of" }, entry.family),
     element("p", {}, entry.purpose),
     element("p", { class: "wl-formula" }, callPattern(entry)),
+    element("p", {}, element("a", { href: `help/${entry.name}.html`, target: "_blank", rel: "noopener" }, "Help page with equations")),
     form.root,
     fact("Gives", [withUnit(entry.gives, entry.resultUnit)]),
     fact("Valid range and error", entry.limits),

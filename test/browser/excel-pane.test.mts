@@ -57,4 +57,8 @@ test("the help page opens at a function's card", async () => {
   await page.goto(new URL("help.html#laminar-methods", server.address).href);
   await page.getByRole("heading", { name: "Which laminar march?" }).waitFor();
   await page.screenshot({ path: path.join(OUTPUT, "help.png") });
+  await page.locator("#LAG_MARCH").getByRole("link", { name: "LAG_MARCH" }).click();
+  await page.getByRole("heading", { name: "Equations" }).waitFor();
+  assert.equal(await page.locator("math").count(), 4);
+  await page.screenshot({ path: path.join(OUTPUT, "help-function.png"), fullPage: true });
 });

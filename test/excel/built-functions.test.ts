@@ -31,8 +31,9 @@ test("functions.json is valid, asks for error cells, and leads each function to 
   expect(check.errors ?? []).toEqual([]);
   expect(metadata.allowErrorForDataTypeAny).toBe(true);
   for (const f of metadata.functions) {
-    expect(f.helpUrl).toBe(`https://localhost:3000/help.html#${f.id}`);
-    expect(help).toMatch(new RegExp(`<article id="?${f.id}"?>`)); // the build drops quotes
+    expect(f.helpUrl).toBe(`https://localhost:3000/help/${f.id}.html`);
+    expect(help).toMatch(new RegExp(`id="?${f.id}"?`)); // the build drops quotes
+    expect(readFileSync(`dist/help/${f.id}.html`, "utf8")).toContain(`<h1>${f.id}</h1>`);
   }
 });
 
