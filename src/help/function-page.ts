@@ -40,5 +40,10 @@ ${equations.length > 0 ? `<h2>Equations</h2>${equations.map(equationFigure).join
 }
 
 function equationFigure({ words, tex }: Equation): string {
-  return `<figure><figcaption>${pageText(words)}</figcaption>${temml.renderToString(tex, { displayMode: true, throwOnError: true, xml: false })}</figure>`;
+  return `<figure><figcaption>${pageText(words)}</figcaption>${upright(temml.renderToString(tex, { displayMode: true, throwOnError: true, xml: false }))}</figure>`;
+}
+
+/** Single letters as they are, not as letters of the mathematical alphabets, which many machines have no font for. */
+function upright(math: string): string {
+  return math.replace(/<mi>/g, '<mi mathvariant="normal">');
 }

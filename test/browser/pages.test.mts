@@ -145,6 +145,8 @@ test("all pages hold at 320 px and in forced colours", async () => {
     await bench.page.waitForTimeout(150);
     const wide = await bench.page.evaluate(() => document.querySelector("#pane")!.scrollWidth - document.querySelector("#pane")!.clientWidth);
     assert.ok(wide <= 0, `${name} is ${wide} px too wide`);
+    const page = await bench.page.evaluate(() => [document.documentElement.scrollWidth, document.documentElement.scrollLeft, document.body.scrollLeft]);
+    assert.deepEqual(page, [320, 0, 0], `${name} scrolls the page sideways`);
   }
   await bench.page.emulateMedia({ forcedColors: "active" });
   await shot("pane-narrow-forced");
