@@ -31,7 +31,7 @@ export function insertForm(entry: CatalogueEntry, host: SheetHost, say: (sentenc
   const place = element("input", { id: "wl-place", type: "text", autocomplete: "off", spellcheck: "false", class: "wl-place" });
   const formed = element("output", { class: "wl-formula", for: inputs.map((input) => input.id).join(" ") });
   const origin = element("p", { class: "wl-quiet" });
-  const shown = element("div", { class: "wl-preview", tabindex: "0", role: "region", "aria-label": "Preview", "aria-live": "polite" });
+  const shown = element("div", { class: "wl-preview", tabindex: "0", role: "region", "aria-label": "Preview", "aria-live": "polite", hidden: true });
   const withChart = element("input", { id: "wl-with-chart", type: "checkbox" });
   const labels = optionLabels(entry);
   let placeIsWritten = false;
@@ -46,14 +46,19 @@ export function insertForm(entry: CatalogueEntry, host: SheetHost, say: (sentenc
   async function showPreview(formed: boolean): Promise<void> {
     if (!call) return;
     const mine = ++turn;
-    if (!formed) return shown.replaceChildren();
+    if (!formed) return put();
     await new Promise((resolve) => setTimeout(resolve, PREVIEW_AFTER));
     if (mine !== turn) return;
     const seen = await preview(host, call, entry.name, inputs.map((input) => input.value)).catch((error: unknown) => ({ kind: "fault" as const, words: error instanceof Error ? error.message : String(error) }));
     if (mine !== turn) return;
-    if (seen.kind !== "rows") return shown.replaceChildren(element("p", { class: seen.kind === "fault" ? "wl-fault" : "wl-quiet" }, seen.words));
-    const cells = seen.rows.map((row) => element("tr", {}, ...row.map((value) => element("td", {}, brief(value)))));
-    shown.replaceChildren(element("table", {}, element("caption", {}, seen.of > seen.rows.length ? `Preview: first ${seen.rows.length} of ${seen.of} rows` : "Preview"), ...cells));
+    if (seen.kind !== "rows") return put(element("p", { class: seen.kind === "fault" ? "wl-fault" : "wl-quiet" }, seen.words));
+    const cells = seen.rows.map((row) => element("tr", {}, ...row.map((value) => element("td", { title: String(value ?? "") }, brief(value)))));
+    put(element("table", {}, element("caption", {}, seen.of > seen.rows.length ? `Preview: first ${seen.rows.length} of ${seen.of} rows` : "Preview"), ...cells));
+  }
+  /** Shows a preview; an empty box is no stop for Tab. */
+  function put(...nodes: HTMLElement[]): void {
+    shown.hidden = nodes.length === 0;
+    shown.replaceChildren(...nodes);
   }
   /** A block of option labels beside the place, empty to be filled in, and its address as the argument. */
   async function writeOptions(i: number): Promise<void> {

@@ -138,6 +138,47 @@ test("Share writes method notes, and saves a plain copy as a file", async () => 
   await axe();
 });
 
+test("Share by keyboard alone; Start by mouse, on a new sheet place", async () => {
+  await tab("Find").focus();
+  await tabTo(/^Share$/);
+  await bench.page.keyboard.press("Enter");
+  await tabTo(/^Write method notes$/);
+  await bench.page.keyboard.press("Enter");
+  await pane().getByRole("status").filter({ hasText: /method notes stand from|need empty cells/ }).waitFor();
+  await bench.page.evaluate(() => globalThis.wallsheetBench!.model.selection.selectZone({ cell: { col: 0, row: 60 }, zone: { left: 0, right: 0, top: 60, bottom: 60 } }));
+  await tab("Start").click();
+  await pane().getByRole("button", { name: /^Drag from a wake rake/ }).click();
+  await pane().getByRole("status").filter({ hasText: "Drag from a wake rake stands in A61:" }).waitFor();
+  const value = await bench.page.evaluate(() => {
+    const { getters } = globalThis.wallsheetBench!.model;
+    return getters.getEvaluatedCell({ sheetId: getters.getActiveSheetId(), col: 4, row: 66 }).value;
+  });
+  // The template's own wake, 1 − 0.22 exp(−(y∕11 mm)²): 2∕c ∫ u (1 − u) dy = 2∕0.6·0.011·√π·(0.22 − 0.22²∕√2).
+  const exact = (2 / 0.6) * 0.011 * Math.sqrt(Math.PI) * (0.22 - 0.22 ** 2 / Math.SQRT2);
+  assert.ok(Math.abs(Number(value) / exact - 1) < 0.01, `${value} for ${exact}`);
+});
+
+test("dark: axe finds nothing on any page; at 200 % zoom of 1280 × 720 nothing scrolls sideways and every tab can be reached", async () => {
+  await bench.page.emulateMedia({ colorScheme: "dark" });
+  for (const name of ["Find", "Look", "Check", "Share", "Start"]) {
+    await tab(name).click();
+    if (name === "Check") await pane().getByText(/WALL cells: (nothing|.*fine)/).waitFor();
+    await axe();
+    if (name !== "Find") await shot(`pane-dark-${name.toLowerCase()}`);
+  }
+  await bench.page.emulateMedia({ colorScheme: "light" });
+  await bench.page.setViewportSize({ width: 640, height: 360 });
+  for (const name of ["Find", "Look", "Check", "Share", "Start"]) {
+    await tab(name).scrollIntoViewIfNeeded();
+    await tab(name).click();
+    assert.equal(await bench.page.evaluate(() => document.querySelector("#pane")!.scrollWidth <= document.querySelector("#pane")!.clientWidth), true, name);
+  }
+  await shot("pane-zoomed");
+  await bench.page.setViewportSize({ width: 820, height: 1180 });
+  await shot("bench-tablet");
+  await bench.page.setViewportSize({ width: 1280, height: 720 });
+});
+
 test("all pages hold at 320 px and in forced colours", async () => {
   await bench.page.setViewportSize({ width: 320, height: 800 });
   for (const name of ["Find", "Look", "Check", "Share", "Start"]) {
