@@ -42,5 +42,7 @@ export function frictionDrag(x: any[][], cf: any[][], ue: any[][], reference_spe
   const along = readOptionalColumn(call, "surface_x", surface_x, { length: stations.length });
   const made = dragOfFriction(stations, friction, speeds, reference, { along });
   if (!made.ok) throw refusalError(call, made);
-  return made.drag.area / length;
+  const coefficient = made.drag.area / length;
+  if (!Number.isFinite(coefficient)) throw refusalError(call, { ok: false, reason: "not finite", argument: "x over chord" });
+  return coefficient;
 }

@@ -65,6 +65,7 @@ export function rakeDrag(
   );
   if (!made.ok) throw refusalError(call, made);
   const d = made.drag;
+  if (!Number.isFinite((Math.abs(d.jones) + Math.abs(d.betz) + d.jonesError + d.betzError + Math.abs(d.curveError)) / length)) throw refusalError(call, { ok: false, reason: "not finite", argument: "y over chord" });
   const from = pressure === null ? "static pressure found from the two ends" : "static pressure given";
   return [
     ["quantity", "value", "±"],
@@ -75,6 +76,6 @@ export function rakeDrag(
     ["total pressure at the first end", d.ends[0], ""],
     ["total pressure at the last end", d.ends[1], ""],
     ["static pressure at mid-wake", d.middlePressure, ""],
-    ["note", `${from}; Jones and Betz differ by ${formatNumber(Number((100 * Math.abs(d.jones / d.betz - 1)).toPrecision(2)))} %`, ""],
+    ["note", `${from}; Jones and Betz differ by ${d.betz === 0 ? "nothing" : `${formatNumber(Number((100 * Math.abs(d.jones / d.betz - 1)).toPrecision(2)))} %`}`, ""],
   ];
 }

@@ -43,7 +43,9 @@ export function wakeDrag(theta: any[][], shape: any[][], edge_speed_ratio: any[]
     losses.map((loss, i) => {
       const made = wakeMomentumLoss(loss, shapes[i]!, ratios[i]!, gas.gas);
       if (!made.ok) throw refusalError(call, { ...made, row: i + 1 });
-      return (2 * made.far) / length;
+      const coefficient = (2 * made.far) / length;
+      if (!Number.isFinite(coefficient)) throw refusalError(call, { ok: false, reason: "not finite", argument: "theta over chord", row: i + 1 });
+      return coefficient;
     }),
   );
 }

@@ -92,6 +92,7 @@ export function rakeDrag(readings: RakeReadings, uncertainty: RakeUncertainty = 
       if (spline.ok) out.curveError = runningIntegral(spline.curve)[n - 1] - sum;
     }
   }
+  if (![out.jones, out.betz, out.jonesError, out.betzError, out.curveError].every(Number.isFinite)) return refuse("not finite", { argument: "y" });
   return { ok: true, drag: out };
 }
 

@@ -76,6 +76,7 @@ const GIVEN_GRADIENT = { least: -0.0681, most: 0.137 } as const;
 const GIVEN_SHAPE = { least: 2.08, most: 4.029 } as const;
 
 function wallFlowRefusal(wallFlow: number): Outcome<never> {
+  if (!Number.isFinite(wallFlow)) return refuse("not finite", { argument: "ue", row: 1 });
   const { leastWallFlow: least, mostWallFlow: most } = CLOSURE_RANGE;
   return refuse("outside range", { argument: "wall_velocity (as vw θ∕ν)", row: 1, values: { value: wallFlow, least, most } });
 }

@@ -13,7 +13,7 @@ import { lagMethod } from "../turbulent/lag-method";
 import { entrainmentMarch, lagMarch } from "../turbulent/turbulent-march";
 import type { RunCounts, TurbulentStop } from "../turbulent/turbulent-run";
 import { turbulentRun } from "../turbulent/turbulent-run";
-import { emptyTurbulentPlace, turbulentState } from "../turbulent/turbulent-state";
+import { emptyTurbulentPlace, LEAST_START_REYNOLDS, turbulentState } from "../turbulent/turbulent-state";
 import { transitionZone } from "../turbulent/transition-zone";
 import { laminarByMethod, type LaminarMethodName } from "./laminar-methods";
 import type { LaminarEnd, LaminarPart } from "./laminar-part";
@@ -154,7 +154,10 @@ function onward(wall: WallConditions, nu: number, gas: EdgeGas, options: LayerOp
   const zone = run > 0 ? transitionZone(begin.x, run, place.speed, place.nu) : null;
   const on = { method, wall, gas, nu, zone };
   const made = turbulentState(on, place, begin.theta);
-  if (!made.ok) return made.reason === "outside range" ? refuse("onset too early", { argument: "onset", at: begin.x, values: made.values }) : made;
+  if (!made.ok) {
+    const early = made.reason === "outside range" && (made.values?.value ?? Infinity) < LEAST_START_REYNOLDS;
+    return early ? refuse("onset too early", { argument: "onset", at: begin.x, values: made.values }) : { ...made, argument: made.argument === "nu" ? "nu" : "Re θ at the onset" };
+  }
   march.onset = { kind: begin.kind, x: begin.x, momentumLoss: begin.theta, momentumReynolds: (place.speed * begin.theta) / place.nu, startShape: made.shape, remark: begin.remark };
   const { stop, counts } = turbulentRun(on, { panel, x: begin.x, state: made.state }, march.columns, options.afterSeparation);
   march.stop = turbulentStop(stop);

@@ -7,8 +7,8 @@ import type { TurbulentMethod } from "./turbulent-method";
 export const HEAD_SEPARATION = 2.4;
 /** The lower end, from which a layer is said to be near separation. */
 export const HEAD_NEAR_SEPARATION = 1.8;
-/** Plate layers have H between these at any Reθ from 20 to 1e9 (1.92 and 1.19 by the balance below). */
-const PLATE_LEAST = 1.15;
+/** Plate layers have H between these at any Reθ from 20 to 1e9. */
+const PLATE_LEAST = 1.1201;
 const PLATE_MOST = 2.3;
 
 const pair: HeadShape = { entrainShape: 0, slope: 0 };

@@ -9,6 +9,9 @@ import { emptyLayer } from "./turbulent-method";
 /** Least Reθ at which a layer is started as turbulent; measured turbulent layers begin near 320 (Preston, J. Fluid Mech. 3 (1958) 373–384). */
 export const LEAST_START_REYNOLDS = 25;
 
+/** Beyond this the power law of the entrainment method leaves no plate layer; a hundred times any ship's. */
+const MOST_START_REYNOLDS = 1e9;
+
 /** The wall and the gas at the fraction t of a panel. */
 export function emptyTurbulentPlace(on: Pick<TurbulentWall, "wall" | "gas" | "nu">, panel: number, t: number): TurbulentPlace {
   const place: TurbulentPlace = { ...emptyPlace(), machSquare: 0, density: 1, viscosity: 1, nu: on.nu };
@@ -33,7 +36,8 @@ export function turbulentState(
 ): Outcome<{ state: Float64Array; shape: number; entrainment: number }> {
   const { method } = on;
   const reynolds = (place.speed * theta) / place.nu;
-  if (!(reynolds >= LEAST_START_REYNOLDS)) return refuse("outside range", { argument: "start momentum loss (as Re θ)", values: { value: reynolds, least: LEAST_START_REYNOLDS, most: Infinity } });
+  if (!Number.isFinite(reynolds)) return refuse("not finite", { argument: "nu" });
+  if (!(reynolds >= LEAST_START_REYNOLDS && reynolds <= MOST_START_REYNOLDS)) return refuse("outside range", { argument: "start momentum loss (as Re θ)", values: { value: reynolds, least: LEAST_START_REYNOLDS, most: MOST_START_REYNOLDS } });
   const used = shape ?? method.plateShape(reynolds, place.machSquare);
   const layer = emptyLayer();
   const state = Float64Array.of(theta, method.marchedShape(used, place.machSquare), 0).subarray(0, method.unknowns);
