@@ -72,8 +72,15 @@ function union(a: CellBox, b: CellBox): CellBox {
   return { left: Math.min(a.left, b.left), top: Math.min(a.top, b.top), right: Math.max(a.right, b.right), bottom: Math.max(a.bottom, b.bottom) };
 }
 
-/** Values that a recalculation leaves alone come back as they were; blank and empty text show alike. */
+/**
+ * Numbers nearer than this are one: another JavaScript engine (Excel's, a browser's) may differ in the last digit of exp and pow, and a
+ * march's choice of steps with it: up to 7e-10 seen between Chromium and Node.
+ */
+const SAME_NUMBER = 1e-8;
+
+/** Blank and empty text show alike. */
 function same(a: StoredValue, b: StoredValue): boolean {
   if (a !== null && b !== null && typeof a === "object" && typeof b === "object") return a.error === b.error;
+  if (typeof a === "number" && typeof b === "number") return Math.abs(a - b) <= SAME_NUMBER * Math.max(Math.abs(a), Math.abs(b));
   return (a ?? "") === (b ?? "");
 }

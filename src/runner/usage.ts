@@ -55,7 +55,7 @@ read or written.`,
   audit: `wallsheet audit BOOK.xlsx [--format table|json|csv]
 
 Recalculates the book without writing it, and tells of every WALL cell: address, functions, and its state
-  calculated   the stored values are what comes out, to 13 digits
+  calculated   the stored values are what comes out, to 8 digits (another program's may differ beyond)
   stale        other values come out than are stored
   error        an error comes out; its sentence stands beside it
   left         it cannot be calculated here; the reason stands beside it

@@ -1,5 +1,5 @@
 import assert from "node:assert/strict";
-import { execFileSync } from "node:child_process";
+import { execFileSync, spawnSync } from "node:child_process";
 import { copyFileSync, readFileSync } from "node:fs";
 import path from "node:path";
 import { after, before, test } from "node:test";
@@ -75,6 +75,14 @@ test("the starter book is saved as a workbook whose stored values are those a re
       }),
     );
   }
+});
+
+test("the audit of the saved book finds every WALL cell calculated", () => {
+  const ran = spawnSync(process.execPath, [path.join(DIST, "wallsheet.js"), "audit", path.join(OUTPUT, "saved-starter.xlsx"), "--format", "json", "-q"], { encoding: "utf8" });
+  assert.equal(ran.status, 1); // the glider's bubble is a finding
+  const cells = JSON.parse(ran.stdout) as { state: string; cell: string }[];
+  assert.ok(cells.length >= 29, String(cells.length));
+  assert.deepEqual(cells.filter((c) => c.state !== "calculated"), []);
 });
 
 test("a saved book opens again with the same formulas and numbers", async () => {
