@@ -50,17 +50,21 @@ export function energyStart(wall: WallConditions, nu: number, options: { startMo
     const more = nose ? 3 : 2;
     const { speedSlope } = place;
     let wallFlow = 0;
+    let settled = false;
     let found: ReturnType<typeof similarWith> = refuse("no convergence", { values: { count: TURNS } });
     for (let turn = 0; turn < TURNS; turn += 1) {
       if (!(wallFlow > CLOSURE_RANGE.leastWallFlow && wallFlow < CLOSURE_RANGE.mostWallFlow)) return wallFlowRefusal(wallFlow);
       found = similarWith(wallFlow, (layer) => layer.similarGradient - (layer.shear + wallFlow) / (more + layer.shape));
       if (!found.ok) return { ...found, argument: "wall_velocity", row: 1 };
       const { layer } = found;
-      const next = place.wallVelocity * Math.sqrt((layer.shear + wallFlow) / (more + layer.shape) / (nu * speedSlope));
-      if (Math.abs(next - wallFlow) < 1e-9) break;
+      // Strong suction may overshoot to where no layer could stay: the next turn comes back from there.
+      const next = place.wallVelocity * Math.sqrt(Math.max(layer.shear + wallFlow, 0) / (more + layer.shape) / (nu * speedSlope));
+      settled = Math.abs(next - wallFlow) < 1e-9;
+      if (settled) break;
       wallFlow = (wallFlow + next) / 2;
     }
     if (!found.ok) return found;
+    if (!settled) return refuse("no convergence", { argument: "wall_velocity", values: { count: TURNS } });
     const square = (((found.layer.shear + wallFlow) / (more + found.layer.shape)) * nu) / speedSlope;
     const layer = { ...found.layer, theta: Math.sqrt(square) };
     return { ok: true, start: { kind: "stagnation point", layer, square, growth: 0, singular: true, blowVelocity: speedSlope * layer.shape * layer.theta * (nose ? 2 : 1) } };
