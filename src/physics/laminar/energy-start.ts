@@ -51,6 +51,8 @@ export function energyStart(wall: WallConditions, nu: number, options: { startMo
     const { speedSlope } = place;
     let wallFlow = 0;
     let settled = false;
+    let share = 0.5;
+    let before = 0;
     let found: ReturnType<typeof similarWith> = refuse("no convergence", { values: { count: TURNS } });
     for (let turn = 0; turn < TURNS; turn += 1) {
       if (!(wallFlow > CLOSURE_RANGE.leastWallFlow && wallFlow < CLOSURE_RANGE.mostWallFlow)) return wallFlowRefusal(wallFlow);
@@ -59,9 +61,13 @@ export function energyStart(wall: WallConditions, nu: number, options: { startMo
       const { layer } = found;
       // Strong suction may overshoot to where no layer could stay: the next turn comes back from there.
       const next = place.wallVelocity * Math.sqrt(Math.max(layer.shear + wallFlow, 0) / (more + layer.shape) / (nu * speedSlope));
-      settled = Math.abs(next - wallFlow) < 1e-9;
+      const miss = next - wallFlow;
+      settled = Math.abs(miss) < 1e-9;
       if (settled) break;
-      wallFlow = (wallFlow + next) / 2;
+      // Half the way, and half of that again whenever it went too far.
+      if (miss * before < 0) share /= 2;
+      before = miss;
+      wallFlow += share * miss;
     }
     if (!found.ok) return found;
     if (!settled) return refuse("no convergence", { argument: "wall_velocity", values: { count: TURNS } });
